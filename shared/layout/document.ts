@@ -1,3 +1,5 @@
+import type { Point } from '../geometry/point';
+
 /**
  * The layout document: everything a layout is, by value, in SI units.
  * Axes: x along the platform's forward axis (true north on a rooftop), y to its left, z up; every position is
@@ -7,8 +9,7 @@
 /** Current version of the document; older ones are upgraded when read (`upgrades.ts`). */
 export const DOCUMENT_VERSION = 1;
 
-/** A position on the plan, metres from the datum: x forward, y left. */
-export type Point = { readonly x: number; readonly y: number };
+export type { Point };
 
 /** A band of frequencies in Hz, `from` < `to`. */
 export type Band = { readonly from: number; readonly to: number };
@@ -61,10 +62,20 @@ export type KeepOut = {
 };
 
 /** An existing hole, bracket or rail position. */
-export type MountPoint = { readonly id: string; readonly name: string; readonly x: number; readonly y: number };
+export type MountPoint = {
+  readonly id: string;
+  readonly name: string;
+  readonly x: number;
+  readonly y: number;
+};
 
 /** Where feeders go through. */
-export type CableEntry = { readonly id: string; readonly name: string; readonly x: number; readonly y: number };
+export type CableEntry = {
+  readonly id: string;
+  readonly name: string;
+  readonly x: number;
+  readonly y: number;
+};
 
 /** Rejection of a filter in the line of a radio, over a band. */
 export type FilterRejection = { readonly from: number; readonly to: number; readonly rejectionDb: number };
