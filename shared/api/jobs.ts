@@ -52,7 +52,10 @@ export const jobDetailSchema = jobSchema.extend({ platforms: z.array(platformBri
 export type JobDetail = z.infer<typeof jobDetailSchema>;
 
 /** POST /api/jobs */
-export const jobRequest = z.strictObject({ name: nameField, customer: z.string().trim().max(120).default('') });
+export const jobRequest = z.strictObject({
+  name: nameField,
+  customer: z.string().trim().max(120).default(''),
+});
 
 /** PATCH /api/jobs/:id */
 export const jobChangeRequest = z.strictObject({

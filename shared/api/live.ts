@@ -77,8 +77,7 @@ export type JoinAnswer =
   | { readonly ok: false; readonly refusal: Refusal };
 
 export type OperationAnswer =
-  | { readonly ok: true; readonly sequence: number }
-  | { readonly ok: false; readonly refusal: Refusal };
+  { readonly ok: true; readonly sequence: number } | { readonly ok: false; readonly refusal: Refusal };
 
 export type LayoutEstimate = { readonly sequence: number; readonly result: Estimate };
 
