@@ -1,0 +1,89 @@
+import { Link as RouterLink, type Href } from 'expo-router';
+import type { ReactNode } from 'react';
+import { Pressable, type StyleProp, type ViewStyle } from 'react-native';
+import { line, radius, space, target } from '../theme/tokens';
+import { useTheme } from '../theme/use-theme';
+import type { WebPressState } from './button';
+import { Icon, type IconName } from './icon';
+import { Text, textStyle } from './text';
+import { webAttributes } from './web-attributes';
+
+type LinkProps = {
+  readonly href: Href;
+  readonly label: string;
+  readonly children?: ReactNode;
+  readonly current?: boolean;
+};
+
+/** A link in a line of text. */
+export function Link({ href, label, children }: LinkProps) {
+  const { color } = useTheme();
+  return (
+    <RouterLink
+      href={href}
+      aria-label={label}
+      style={[textStyle('body'), { color: color.action, textDecorationLine: 'underline' }]}
+    >
+      {children ?? label}
+    </RouterLink>
+  );
+}
+
+type LinkAreaProps = LinkProps & { readonly style?: StyleProp<ViewStyle> };
+
+/** A whole area that leads somewhere: a line of a list, a place in the navigation. */
+export function LinkArea({ href, label, children, current, style }: LinkAreaProps) {
+  const { color } = useTheme();
+  return (
+    <RouterLink href={href} asChild>
+      <Pressable
+        aria-label={label}
+        {...webAttributes({ 'aria-current': current ? 'page' : undefined })}
+        style={({ pressed, hovered }: WebPressState) => [
+          {
+            minHeight: target.min,
+            justifyContent: 'center',
+            backgroundColor: pressed || hovered === true ? color.hover : 'transparent',
+          },
+          style,
+        ]}
+      >
+        {children}
+      </Pressable>
+    </RouterLink>
+  );
+}
+
+type LinkButtonProps = LinkProps & { readonly icon?: IconName; readonly primary?: boolean };
+
+/** A link that looks like a button. */
+export function LinkButton({ href, label, icon, primary = false }: LinkButtonProps) {
+  const { color } = useTheme();
+  return (
+    <RouterLink href={href} asChild>
+      <Pressable
+        aria-label={label}
+        style={({ pressed, hovered }: WebPressState) => ({
+          minHeight: target.min,
+          flexDirection: 'row',
+          alignItems: 'center',
+          justifyContent: 'center',
+          gap: space.s,
+          paddingHorizontal: space.l,
+          borderRadius: radius.m,
+          borderWidth: line.hair,
+          borderColor: primary ? 'transparent' : color.edge,
+          backgroundColor:
+            pressed || hovered === true
+              ? color[primary ? 'actionHover' : 'hover']
+              : color[primary ? 'action' : 'sheet'],
+        })}
+      >
+        {icon ? <Icon name={icon} tone={primary ? 'onAction' : 'ink'} /> : null}
+        <Text variant="strong" tone={primary ? 'onAction' : 'ink'}>
+          {label}
+        </Text>
+      </Pressable>
+    </RouterLink>
+  );
+}

@@ -1,0 +1,108 @@
+import { useEffect, useRef, useState } from 'react';
+import { Field } from './field';
+
+/** What a reading of an entry gives: the number in SI, or what is wrong with it. */
+export type QuantityReading =
+  { readonly ok: true; readonly value: number } | { readonly ok: false; readonly message: string };
+
+type QuantityFieldProps = {
+  readonly label: string;
+  /** In SI; null while nothing valid stands there. */
+  readonly value: number | null;
+  /** Called when an entry is finished (Enter, or leaving the field) and reads as a number. */
+  readonly onCommit: (value: number) => void;
+  readonly read: (text: string) => QuantityReading;
+  readonly format: (value: number) => string;
+  readonly hint?: string;
+  /** A refusal from elsewhere (the server, the plan): shown while the text that caused it stands. */
+  readonly error?: string;
+  readonly labelHidden?: boolean;
+  readonly readOnly?: boolean;
+  /** Arrow up and down change the value by this much (SI); ten times as much with Shift. */
+  readonly step?: number;
+  readonly testID?: string;
+};
+
+/**
+ * A number with its unit, as people write it. The text stays as it was typed while it is being edited and while
+ * it is refused; a finished entry shows as the number that was understood.
+ */
+export function QuantityField({
+  label,
+  value,
+  onCommit,
+  read,
+  format,
+  hint,
+  error,
+  labelHidden,
+  readOnly = false,
+  step,
+  testID,
+}: QuantityFieldProps) {
+  const shown = value === null ? '' : format(value);
+  const [draft, setDraft] = useState<string | null>(null);
+  const [problem, setProblem] = useState<string | null>(null);
+  const lastShown = useRef(shown);
+
+  // A value that changed elsewhere replaces a refused text, not one that is being typed.
+  useEffect(() => {
+    if (lastShown.current === shown) return;
+    lastShown.current = shown;
+    if (problem === null) return;
+    setDraft(null);
+    setProblem(null);
+  }, [shown, problem]);
+
+  const finish = () => {
+    if (draft === null) return;
+    if (draft.trim() === shown) {
+      setDraft(null);
+      setProblem(null);
+      return;
+    }
+    const reading = read(draft);
+    if (!reading.ok) {
+      setProblem(reading.message);
+      return;
+    }
+    setProblem(null);
+    setDraft(null);
+    onCommit(reading.value);
+  };
+
+  const reading = draft !== null && draft.trim() !== '' ? read(draft) : null;
+  return (
+    <Field
+      label={label}
+      labelHidden={labelHidden}
+      value={draft ?? shown}
+      onChange={(text) => {
+        setDraft(text);
+        setProblem(null);
+      }}
+      onBlur={finish}
+      onKeyDown={(event) => {
+        if (event.key === 'Enter') finish();
+        else if (event.key === 'Escape' && draft !== null) {
+          event.stopPropagation();
+          setDraft(null);
+          setProblem(null);
+        } else if (step !== undefined && value !== null && draft === null && !readOnly) {
+          const sign = event.key === 'ArrowUp' ? 1 : event.key === 'ArrowDown' ? -1 : 0;
+          if (sign === 0) return;
+          event.preventDefault();
+          onCommit(value + sign * step * (event.shiftKey ? 10 : 1));
+        }
+      }}
+      hint={hint}
+      error={problem ?? (draft === null ? error : undefined)}
+      understood={
+        reading?.ok && format(reading.value) !== draft?.trim() ? `= ${format(reading.value)}` : undefined
+      }
+      readOnly={readOnly}
+      figures
+      testID={testID}
+    />
+  );
+}
