@@ -100,7 +100,42 @@ export function addChainBlock(
   for (let p = 0; p < test.segments; p += 1) {
     nodeReactions(k, source, test, p, offset, waves);
     addHats(k, source, waves.fallingRe, waves.fallingIm, 0, factor, blockRe, blockIm, p, columns);
+    addEnds(k, source, waves.fallingRe, waves.fallingIm, factor, blockRe, blockIm, p, columns);
     addHats(k, source, waves.risingRe, waves.risingIm, 0, factor, blockRe, blockIm, p + 1, columns);
+    addEnds(k, source, waves.risingRe, waves.risingIm, factor, blockRe, blockIm, p + 1, columns);
+  }
+}
+
+/**
+ * Adds the same for a chain in its own field, or in that of a parallel chain of the same step and length: the
+ * node waves then depend on the difference of the indices alone (`extended` begins `segments` nodes before
+ * `source`) or, for a chain and its upright image, on their sum, so one test segment serves for all.
+ */
+export function addParallelBlock(
+  k: number,
+  source: Chain,
+  test: Chain,
+  dependsOn: 'difference' | 'sum',
+  offset: number,
+  factor: number,
+  blockRe: Float64Array,
+  blockIm: Float64Array,
+): void {
+  const n = source.segments;
+  const [x, y, z] = source.origin;
+  const [ux, uy, uz] = source.direction;
+  const back = dependsOn === 'difference' ? n * source.step : 0;
+  const extended: Chain = {
+    ...source,
+    origin: [x - back * ux, y - back * uy, z - back * uz],
+    segments: 2 * n,
+  };
+  const waves = createNodeReactions(2 * n);
+  nodeReactions(k, extended, test, 0, offset, waves);
+  for (let p = 0; p < n; p += 1) {
+    const from = dependsOn === 'difference' ? n - p : p;
+    addHats(k, source, waves.fallingRe, waves.fallingIm, from, factor, blockRe, blockIm, p, n + 1);
+    addHats(k, source, waves.risingRe, waves.risingIm, from, factor, blockRe, blockIm, p + 1, n + 1);
   }
 }
 
@@ -108,7 +143,7 @@ export function addChainBlock(
  * Turns node waves (starting at column `from`) into the impedances of the chain's hats against one test current
  * and adds them to a column of the block: jumps 1, -2 cos kd, 1 (at an end -cos kd, 1), times j eta / 4 pi.
  */
-export function addHats(
+function addHats(
   k: number,
   source: Chain,
   waveRe: Float64Array,
@@ -122,7 +157,6 @@ export function addHats(
 ): void {
   const n = source.segments;
   const c = Math.cos(k * source.step);
-  const end = Math.sin(k * source.step);
   const scale = (factor * freeSpaceImpedance) / (4 * Math.PI);
   for (let i = 0; i <= n; i += 1) {
     const at = from + i;
@@ -141,11 +175,26 @@ export function addHats(
     blockRe[i * columns + column]! -= scale * im;
     blockIm[i * columns + column]! += scale * re;
   }
-  const startTerm = from + n + 1;
-  blockRe[column]! -= scale * end * waveRe[startTerm]!;
-  blockIm[column]! -= scale * end * waveIm[startTerm]!;
-  blockRe[n * columns + column]! += scale * end * waveRe[startTerm + 1]!;
-  blockIm[n * columns + column]! += scale * end * waveIm[startTerm + 1]!;
+}
+
+/** Adds what a current that goes on beyond the chain's start or end leaves of its radial field. */
+function addEnds(
+  k: number,
+  source: Chain,
+  waveRe: Float64Array,
+  waveIm: Float64Array,
+  factor: number,
+  blockRe: Float64Array,
+  blockIm: Float64Array,
+  column: number,
+  columns: number,
+): void {
+  const n = source.segments;
+  const scale = (factor * freeSpaceImpedance * Math.sin(k * source.step)) / (4 * Math.PI);
+  blockRe[column]! -= scale * waveRe[n + 1]!;
+  blockIm[column]! -= scale * waveIm[n + 1]!;
+  blockRe[n * columns + column]! += scale * waveRe[n + 2]!;
+  blockIm[n * columns + column]! += scale * waveIm[n + 2]!;
 }
 
 /** Everything that stays the same along one test segment. */

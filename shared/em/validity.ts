@@ -10,12 +10,12 @@ const leastSpacingInRadii = 10;
 /** From here on one assumed sinusoid is off by 3 dB or more against the solved current: k h / pi. */
 const greatestPhaseOfOnePiece = 0.8;
 
-/** What one wire by itself breaks at a frequency (hertz). `pieceLength` is null for the one-piece model. */
+/** What one wire by itself breaks at a frequency (hertz), its model's segments being `segmentLength` metres long. */
 export function wireValidity(
   wire: Wire,
   frequency: number,
   method: Method,
-  pieceLength: number | null,
+  segmentLength: number,
 ): ValidityEntry[] {
   const entries: ValidityEntry[] = [];
   const add = (code: ValidityEntry['code'], message: string) => entries.push({ wires: [wire.id], code, message });
@@ -27,14 +27,13 @@ export function wireValidity(
   if (length < leastSlenderness * 2 * wire.radius) {
     add('too-stout', `length ${round(length / (2 * wire.radius))} diameters, held from 20 diameters`);
   }
-  if (pieceLength !== null && pieceLength < leastPieceInRadii * wire.radius) {
-    add('too-short-pieces', `pieces of ${round(pieceLength / wire.radius)} radii, held from 2.5 radii`);
+  if (segmentLength < leastPieceInRadii * wire.radius) {
+    add('too-short-pieces', `pieces of ${round(segmentLength / wire.radius)} radii, held from 2.5 radii`);
   }
   if (method === 'emf') {
-    const arm = wire.feed === 'start' ? length : length / 2;
-    const phase = (2 * arm) / lambda;
+    const phase = (2 * segmentLength) / lambda;
     if (phase > greatestPhaseOfOnePiece) {
-      add('too-long-for-one-piece', `arm of ${round(arm / lambda)} wavelength, one piece is held up to 0.4`);
+      add('too-long-for-one-piece', `arm of ${round(segmentLength / lambda)} wavelength, one piece is held up to 0.4`);
     }
   }
   return entries;
@@ -52,6 +51,23 @@ export function pairValidity(one: Wire, other: Wire): ValidityEntry | null {
     return { wires: [one.id, other.id], code: 'too-close', message };
   }
   return null;
+}
+
+/** All that a set of wires breaks at a frequency: each wire by itself, then the pairs. */
+export function validityOf(
+  wires: readonly Wire[],
+  frequency: number,
+  method: Method,
+  segmentLength: (wire: Wire) => number,
+): ValidityEntry[] {
+  const entries = wires.flatMap((wire) => wireValidity(wire, frequency, method, segmentLength(wire)));
+  wires.forEach((wire, i) => {
+    for (const other of wires.slice(i + 1)) {
+      const entry = pairValidity(wire, other);
+      if (entry !== null) entries.push(entry);
+    }
+  });
+  return entries;
 }
 
 /** Whether a wire stands on the plane with its start. */

@@ -1,3 +1,4 @@
+import type { ComplexMatrix } from '../../numerics/complex-matrix';
 import type { Complex, Ground, Pattern, PatternRequest, ValidityEntry, Wire } from '../scene';
 import type { OwnCurrentCache } from './own-current-cache';
 
@@ -20,6 +21,8 @@ export interface LiveSolver {
   update(wires: readonly Wire[]): void;
   /** -20 lg |S_ij| from one port into another, dB, at most 300. @throws RangeError for a wire without a port */
   isolationDb(frequencyIndex: number, into: string, from: string): number;
+  /** Admittance matrix of the loaded ports, siemens; rows and columns follow the fed wires. */
+  loadedAdmittance(frequencyIndex: number): ComplexMatrix;
   /** Driving-point impedance of a port in place, all other ports closed, ohm. */
   impedanceInPlace(frequencyIndex: number, wire: string): Complex;
   /** Driving-point impedance of the wire alone on the same ground, ohm. */

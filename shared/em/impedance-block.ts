@@ -1,0 +1,49 @@
+import { createComplexMatrix, type ComplexMatrix } from '../numerics/complex-matrix';
+import { chainMirrored, segmentDistance } from './chain';
+import type { WireMesh } from './mesh';
+import { addChainBlock, addParallelBlock } from './reaction';
+import type { Ground } from './scene';
+
+/** Directions within 1e-8 rad of upright or horizontal count as such. */
+const straightWithin = 1e-16;
+
+/**
+ * Impedances between the node currents of one wire, its image included, all nodes by all nodes. The test
+ * filament lies one radius off the axis. Over the plane only the real wire is tested: a whip gets half of the
+ * dipole's impedance without further halving.
+ */
+export function selfBlock(k: number, ground: Ground, mesh: WireMesh): ComplexMatrix {
+  const { chain, wire } = mesh;
+  const block = createComplexMatrix(chain.segments + 1, chain.segments + 1);
+  addParallelBlock(k, chain, chain, 'difference', wire.radius, 1, block.re, block.im);
+  if (ground === 'none') return block;
+  const image = chainMirrored(chain);
+  const [ux, uy, uz] = chain.direction;
+  if (ux * ux + uy * uy < straightWithin) {
+    addParallelBlock(k, image, chain, 'sum', wire.radius, -1, block.re, block.im);
+  } else if (uz * uz < straightWithin) {
+    addParallelBlock(k, image, chain, 'difference', wire.radius, -1, block.re, block.im);
+  } else {
+    addChainBlock(k, image, chain, wire.radius, -1, block.re, block.im);
+  }
+  return block;
+}
+
+/** Impedances between the node currents of two wires, nodes of `source` by nodes of `test`, images included. */
+export function mutualBlock(k: number, ground: Ground, source: WireMesh, test: WireMesh): ComplexMatrix {
+  const block = createComplexMatrix(source.chain.segments + 1, test.chain.segments + 1);
+  const offset = overlapOffset(source, test);
+  addChainBlock(k, source.chain, test.chain, offset, 1, block.re, block.im);
+  if (ground === 'plane') {
+    addChainBlock(k, chainMirrored(source.chain), test.chain, offset, -1, block.re, block.im);
+  }
+  return block;
+}
+
+/** Wires that run through each other are never held; a shift by the greater radius keeps their numbers finite. */
+function overlapOffset(source: WireMesh, test: WireMesh): number {
+  const a = source.wire;
+  const b = test.wire;
+  const distance = segmentDistance(a.start, a.end, b.start, b.end);
+  return distance < a.radius + b.radius ? Math.max(a.radius, b.radius) : 0;
+}
