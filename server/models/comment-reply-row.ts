@@ -21,13 +21,13 @@ export class CommentReplyRow extends Model<InferAttributes<CommentReplyRow>, Inf
   declare author?: NonAttribute<Membership>;
 
   /** Binds the class to a connection; after `Membership`. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     CommentReplyRow.init(
       {
-        id: { ...idColumn, primaryKey: true, defaultValue: createId },
-        commentId: idColumn,
+        id: { ...idColumn(), primaryKey: true, defaultValue: createId },
+        commentId: idColumn(),
         text: { type: DataTypes.STRING(1000), allowNull: false },
-        authorId: idColumn,
+        authorId: idColumn(),
         createdAt: DataTypes.DATE(3),
       },
       { sequelize, modelName: 'CommentReplyRow', tableName: 'comment_replies', updatedAt: false },

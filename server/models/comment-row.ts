@@ -34,19 +34,19 @@ export class CommentRow extends Model<InferAttributes<CommentRow>, InferCreation
   declare replies?: NonAttribute<CommentReplyRow[]>;
 
   /** Binds the class to a connection; after `Revision`, `CommentReplyRow` and `Membership`. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     CommentRow.init(
       {
-        id: { ...idColumn, primaryKey: true, defaultValue: createId },
-        teamId: idColumn,
-        layoutId: idColumn,
-        revisionId: optionalIdColumn,
+        id: { ...idColumn(), primaryKey: true, defaultValue: createId },
+        teamId: idColumn(),
+        layoutId: idColumn(),
+        revisionId: optionalIdColumn(),
         number: { type: DataTypes.INTEGER.UNSIGNED, allowNull: false },
         target: { type: DataTypes.TEXT, allowNull: false },
         text: { type: DataTypes.STRING(1000), allowNull: false },
-        authorId: idColumn,
+        authorId: idColumn(),
         resolvedAt: { type: DataTypes.DATE(3), allowNull: true },
-        resolvedById: optionalIdColumn,
+        resolvedById: optionalIdColumn(),
         createdAt: DataTypes.DATE(3),
         updatedAt: DataTypes.DATE(3),
       },

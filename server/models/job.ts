@@ -21,11 +21,11 @@ export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job
   declare updatedAt: CreationOptional<Date>;
 
   /** Binds the class to a connection. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     Job.init(
       {
-        id: { ...idColumn, primaryKey: true, defaultValue: createId },
-        teamId: idColumn,
+        id: { ...idColumn(), primaryKey: true, defaultValue: createId },
+        teamId: idColumn(),
         name: { type: DataTypes.STRING(120), allowNull: false },
         customer: { type: DataTypes.STRING(120), allowNull: false },
         archivedAt: { type: DataTypes.DATE(3), allowNull: true },

@@ -27,12 +27,12 @@ export class Layout extends Model<InferAttributes<Layout>, InferCreationAttribut
   declare platform?: NonAttribute<Platform>;
 
   /** Binds the class to a connection; after `Platform`. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     Layout.init(
       {
-        id: { ...idColumn, primaryKey: true, defaultValue: createId },
-        teamId: idColumn,
-        platformId: idColumn,
+        id: { ...idColumn(), primaryKey: true, defaultValue: createId },
+        teamId: idColumn(),
+        platformId: idColumn(),
         name: { type: DataTypes.STRING(120), allowNull: false },
         sequence: { type: DataTypes.INTEGER.UNSIGNED, allowNull: false, defaultValue: 0 },
         document: { type: DataTypes.TEXT('long'), allowNull: false },

@@ -16,13 +16,13 @@ export class OperationRow extends Model<InferAttributes<OperationRow>, InferCrea
   declare committedAt: Date;
 
   /** Binds the class to a connection. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     OperationRow.init(
       {
-        layoutId: { ...idColumn, primaryKey: true },
+        layoutId: { ...idColumn(), primaryKey: true },
         sequence: { type: DataTypes.INTEGER.UNSIGNED, primaryKey: true },
-        id: idColumn,
-        memberId: idColumn,
+        id: idColumn(),
+        memberId: idColumn(),
         memberName: { type: DataTypes.STRING(120), allowNull: false },
         version: { type: DataTypes.INTEGER.UNSIGNED, allowNull: false },
         changes: { type: DataTypes.TEXT('long'), allowNull: false },

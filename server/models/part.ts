@@ -24,11 +24,11 @@ export class Part extends Model<InferAttributes<Part>, InferCreationAttributes<P
   declare updatedAt: CreationOptional<Date>;
 
   /** Binds the class to a connection. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     Part.init(
       {
-        id: { ...idColumn, primaryKey: true, defaultValue: createId },
-        teamId: idColumn,
+        id: { ...idColumn(), primaryKey: true, defaultValue: createId },
+        teamId: idColumn(),
         kind: { type: DataTypes.STRING(20), allowNull: false },
         name: { type: DataTypes.STRING(120), allowNull: false },
         content: { type: DataTypes.TEXT('long'), allowNull: false },

@@ -26,12 +26,12 @@ export class Platform extends Model<InferAttributes<Platform>, InferCreationAttr
   declare job?: NonAttribute<Job>;
 
   /** Binds the class to a connection; after `Job`. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     Platform.init(
       {
-        id: { ...idColumn, primaryKey: true, defaultValue: createId },
-        teamId: idColumn,
-        jobId: idColumn,
+        id: { ...idColumn(), primaryKey: true, defaultValue: createId },
+        teamId: idColumn(),
+        jobId: idColumn(),
         name: { type: DataTypes.STRING(120), allowNull: false },
         kind: { type: DataTypes.STRING(20), allowNull: false },
         document: { type: DataTypes.TEXT('long'), allowNull: false },

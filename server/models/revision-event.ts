@@ -26,13 +26,13 @@ export class RevisionEvent extends Model<InferAttributes<RevisionEvent>, InferCr
   declare at: Date;
 
   /** Binds the class to a connection. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     RevisionEvent.init(
       {
         id: { type: DataTypes.BIGINT.UNSIGNED, primaryKey: true, autoIncrement: true },
-        revisionId: idColumn,
+        revisionId: idColumn(),
         kind: { type: DataTypes.STRING(20), allowNull: false },
-        memberId: idColumn,
+        memberId: idColumn(),
         memberName: { type: DataTypes.STRING(120), allowNull: false },
         reason: { type: DataTypes.STRING(1000), allowNull: true },
         at: { type: DataTypes.DATE(3), allowNull: false },

@@ -33,12 +33,12 @@ export class Revision extends Model<InferAttributes<Revision>, InferCreationAttr
   declare events?: NonAttribute<RevisionEvent[]>;
 
   /** Binds the class to a connection; after `RevisionEvent`. */
-  static bind(sequelize: Sequelize): void {
+  static bindTo(sequelize: Sequelize): void {
     Revision.init(
       {
-        id: { ...idColumn, primaryKey: true, defaultValue: createId },
-        teamId: idColumn,
-        layoutId: idColumn,
+        id: { ...idColumn(), primaryKey: true, defaultValue: createId },
+        teamId: idColumn(),
+        layoutId: idColumn(),
         letter: { type: DataTypes.STRING(4), allowNull: false },
         hash: { type: DataTypes.CHAR(64), allowNull: false },
         content: { type: DataTypes.TEXT('long'), allowNull: false },
@@ -47,7 +47,7 @@ export class Revision extends Model<InferAttributes<Revision>, InferCreationAttr
         jobName: { type: DataTypes.STRING(120), allowNull: false },
         platformName: { type: DataTypes.STRING(120), allowNull: false },
         layoutName: { type: DataTypes.STRING(120), allowNull: false },
-        savedById: idColumn,
+        savedById: idColumn(),
         savedByName: { type: DataTypes.STRING(120), allowNull: false },
         savedAt: { type: DataTypes.DATE(3), allowNull: false },
       },

@@ -1,0 +1,35 @@
+import { DataTypes, type Model, type ModelAttributeColumnOptions } from 'sequelize';
+import { ROLES, type Role } from '@/shared/api/fields';
+
+/** A column that holds an identifier of `shared/ids`. New each time: Sequelize writes into what it is given. */
+export function idColumn() {
+  return { type: DataTypes.CHAR(26), allowNull: false };
+}
+
+/** A column that may hold an identifier of `shared/ids`. */
+export function optionalIdColumn() {
+  return { type: DataTypes.CHAR(26), allowNull: true };
+}
+
+/** A set of roles, stored as their names in the order of `ROLES`, joined by commas. */
+export function rolesColumn(): ModelAttributeColumnOptions {
+  return {
+    type: DataTypes.STRING(120),
+    allowNull: false,
+    get(this: Model): readonly Role[] {
+      return parseRoles(this.getDataValue('roles') as string);
+    },
+    set(this: Model, roles: readonly Role[]) {
+      this.setDataValue('roles', formatRoles(roles));
+    },
+  };
+}
+
+function parseRoles(text: string): readonly Role[] {
+  const names = new Set(text.split(','));
+  return ROLES.filter((role) => names.has(role));
+}
+
+function formatRoles(roles: readonly Role[]): string {
+  return ROLES.filter((role) => roles.includes(role)).join(',');
+}
