@@ -16,9 +16,12 @@ export function createSocketServer(
   http: HttpServer,
   services: Services,
   sessionHandlers: readonly RequestHandler[],
+  options: { readonly foreignUpgrades?: boolean } = {},
 ): SocketServer {
   const io = new SocketServer(http, {
     serveClient: false,
+    // In development another server takes the upgrades that are not ours.
+    destroyUpgrade: !options.foreignUpgrades,
     maxHttpBufferSize: MESSAGE_LIMIT_BYTES,
     // CORS settings do not guard websockets.
     allowRequest: (request, answer) => {

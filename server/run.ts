@@ -1,0 +1,44 @@
+import { ConfigError, parseConfig } from './config/config';
+import { describeError } from './config/logger';
+import { StartProblem } from './local/start-problem';
+import { startServer, type RunningServer, type StartOptions } from './start';
+
+/** Runs a server until SIGINT or SIGTERM; every failure is one line and exit code 1. */
+export async function run(openFront?: StartOptions['openFront']): Promise<void> {
+  const abort = new AbortController();
+  let server: RunningServer | undefined;
+  let stopping: Promise<void> | undefined;
+  const stop = () => {
+    abort.abort();
+    if (server) stopping ??= server.stop().then(() => process.exit(0), fail);
+  };
+  process.on('SIGINT', stop);
+  process.on('SIGTERM', stop);
+  // A console that went away (a closed terminal or pipe) must not end the server.
+  process.stdout.on('error', () => undefined);
+  process.stderr.on('error', () => undefined);
+  try {
+    const config = parseConfig(process.env);
+    server = await startServer(config, { say, signal: abort.signal, ...(openFront ? { openFront } : {}) });
+    if (abort.signal.aborted) stop();
+  } catch (error) {
+    if (abort.signal.aborted) process.exit(0);
+    fail(error);
+  }
+}
+
+function say(line: string): void {
+  process.stdout.write(`${line}\n`);
+}
+
+function fail(error: unknown): never {
+  for (const line of explain(error)) process.stderr.write(`${line}\n`);
+  process.exit(1);
+}
+
+function explain(error: unknown): readonly string[] {
+  if (error instanceof ConfigError) return error.lines;
+  if (error instanceof StartProblem) return [error.message];
+  const { message } = describeError(error);
+  return [`Elbowroom could not go on: ${String(message).split('\n')[0]}`];
+}
