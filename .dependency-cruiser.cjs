@@ -28,7 +28,7 @@ module.exports = {
     allow(
       'commands',
       '^server/commands/',
-      '^(server/(commands|policies|models|database|auth|tasks|estimates|collaboration|config)/|shared/)',
+      '^(server/((commands|policies|models|database|auth|tasks|estimates|collaboration|config|mail)/|services\\.ts)|shared/)',
     ),
     {
       name: 'migrations-stand-alone',

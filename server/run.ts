@@ -1,6 +1,6 @@
-import { ConfigError, parseConfig } from './config/config';
-import { describeError } from './config/logger';
-import { StartProblem } from './local/start-problem';
+import { explain } from './cli/run-command';
+import { parseConfig } from './config/config';
+import { readEnvironment } from './config/environment';
 import { startServer, type RunningServer, type StartOptions } from './start';
 
 /** Runs a server until SIGINT or SIGTERM; every failure is one line and exit code 1. */
@@ -18,7 +18,7 @@ export async function run(openFront?: StartOptions['openFront']): Promise<void> 
   process.stdout.on('error', () => undefined);
   process.stderr.on('error', () => undefined);
   try {
-    const config = parseConfig(process.env);
+    const config = parseConfig(readEnvironment());
     server = await startServer(config, { say, signal: abort.signal, ...(openFront ? { openFront } : {}) });
     if (abort.signal.aborted) stop();
   } catch (error) {
@@ -34,11 +34,4 @@ function say(line: string): void {
 function fail(error: unknown): never {
   for (const line of explain(error)) process.stderr.write(`${line}\n`);
   process.exit(1);
-}
-
-function explain(error: unknown): readonly string[] {
-  if (error instanceof ConfigError) return error.lines;
-  if (error instanceof StartProblem) return [error.message];
-  const { message } = describeError(error);
-  return [`Elbowroom could not go on: ${String(message).split('\n')[0]}`];
 }

@@ -4,7 +4,6 @@ import { Strategy as LocalStrategy } from 'passport-local';
 import { checkCredentials } from './check-credentials';
 
 declare global {
-  // eslint-disable-next-line @typescript-eslint/no-namespace -- passport declares its user in this namespace
   namespace Express {
     interface User {
       readonly personId: string;

@@ -1,8 +1,8 @@
 import type { Request, RequestHandler } from 'express';
 import { refuseRequest } from '../middleware/refusal-error';
 import { Membership } from '../models/membership';
-import { Person } from '../models/person';
-import { Team } from '../models/team';
+import type { Person } from '../models/person';
+import type { Team } from '../models/team';
 import type { Actor } from '../policies/policy';
 
 /** A membership with its person and team loaded. */

@@ -2,7 +2,8 @@ import { randomBytes } from 'node:crypto';
 import { chmodSync, existsSync, mkdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 
-const SECRET_FILE = 'session-secret';
+/** The name of the file with the secret that signs session cookies. */
+export const SECRET_FILE = 'session-secret';
 const SECRET_BYTES = 48;
 
 /** Where things are in a data folder. */

@@ -2,6 +2,7 @@ import { spawn } from 'node:child_process';
 import { createReadStream, createWriteStream } from 'node:fs';
 import { pipeline } from 'node:stream/promises';
 import { createGunzip, createGzip } from 'node:zlib';
+import { readEnvironment } from '../config/environment';
 
 /** How MariaDB's own tools reach a database. */
 export interface ToolTarget {
@@ -68,7 +69,7 @@ export async function loadDump(target: ToolTarget, path: string): Promise<void> 
 function spawnTool(name: string, target: ToolTarget, args: readonly string[]) {
   return spawn(name, [...target.args, ...args], {
     stdio: ['pipe', 'pipe', 'pipe'],
-    env: { ...process.env, ...(target.password === undefined ? {} : { MYSQL_PWD: target.password }) },
+    env: { ...readEnvironment(), ...(target.password === undefined ? {} : { MYSQL_PWD: target.password }) },
   });
 }
 

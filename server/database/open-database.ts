@@ -46,8 +46,8 @@ export async function openDatabase(
   const instance = await startPrivateDatabase(folder.database);
   try {
     if (instance.adopted) say('Took over the database that an earlier start left running.');
-    await createPrivateDatabase(instance.socket, PRIVATE_DATABASE);
     const accounts = await preparePrivateAccounts(instance);
+    await createPrivateDatabase(instance.socket, PRIVATE_DATABASE);
     const sequelize = await prepare(
       {
         ownerUrl: `${accounts.ownerUrl}/${PRIVATE_DATABASE}`,

@@ -12,6 +12,7 @@ import {
 } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { dirname, join, resolve } from 'node:path';
+import { readEnvironment } from '../config/environment';
 import { StartProblem } from './start-problem';
 
 const ROOT = resolve(__dirname, '../..');
@@ -103,7 +104,7 @@ function exportClient(outputFolder: string, logPath: string, signal: AbortSignal
         cwd: ROOT,
         stdio: ['ignore', 'pipe', 'pipe'],
         env: {
-          ...process.env,
+          ...readEnvironment(),
           NODE_ENV: 'production',
           NODE_OPTIONS: '',
           CI: '1',

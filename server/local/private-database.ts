@@ -14,6 +14,7 @@ import { createServer, type AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import { dirname, join } from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
+import { readEnvironment } from '../config/environment';
 import { findInstance, isDatabaseServer, type Instance } from './find-instance';
 import { runTool } from './run-tool';
 import { StartProblem } from './start-problem';
@@ -190,7 +191,8 @@ function makeSocketFolder(): string {
   return mkdtempSync(preferred.length > SOCKET_PATH_LIMIT ? '/tmp/elbowroom-' : preferred);
 }
 
-function findFreePort(): Promise<number> {
+/** A port of 127.0.0.1 that nobody uses at the moment. */
+export function findFreePort(): Promise<number> {
   return new Promise((resolve, reject) => {
     const server = createServer();
     server.once('error', reject);
@@ -207,7 +209,12 @@ async function runServerTool(name: string, args: readonly string[]) {
 
 // Debian keeps the server in /usr/sbin, which an ordinary user's PATH leaves out.
 function findServerTool(name: string): string {
-  const folders = [...(process.env['PATH'] ?? '').split(':'), '/usr/sbin', '/usr/local/sbin', '/usr/bin'];
+  const folders = [
+    ...(readEnvironment()['PATH'] ?? '').split(':'),
+    '/usr/sbin',
+    '/usr/local/sbin',
+    '/usr/bin',
+  ];
   const path = folders.map((folder) => join(folder, name)).find((candidate) => existsSync(candidate));
   if (path === undefined) {
     throw new StartProblem(

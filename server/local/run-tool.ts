@@ -1,4 +1,5 @@
 import { spawn } from 'node:child_process';
+import { readEnvironment } from '../config/environment';
 
 /** What a tool answered. */
 export interface ToolAnswer {
@@ -8,9 +9,17 @@ export interface ToolAnswer {
 }
 
 /** Runs a program to its end, with a text on its standard input. */
-export function runTool(command: string, args: readonly string[], input = ''): Promise<ToolAnswer> {
+export function runTool(
+  command: string,
+  args: readonly string[],
+  input = '',
+  environment: Readonly<Record<string, string>> = {},
+): Promise<ToolAnswer> {
   return new Promise((resolve, reject) => {
-    const child = spawn(command, args, { stdio: ['pipe', 'pipe', 'pipe'] });
+    const child = spawn(command, args, {
+      stdio: ['pipe', 'pipe', 'pipe'],
+      env: { ...readEnvironment(), ...environment },
+    });
     const output: Buffer[] = [];
     const complaint: Buffer[] = [];
     child.stdout.on('data', (chunk: Buffer) => output.push(chunk));

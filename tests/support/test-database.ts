@@ -39,6 +39,7 @@ export async function createTestDatabase(): Promise<TestDatabase> {
 }
 
 function readVariable(name: string): string {
+  // eslint-disable-next-line expo/no-dynamic-env-var -- the rule is about what a bundler replaces; this runs in Node
   const value = process.env[name];
   if (value === undefined) throw new Error(`${name} is missing: the test run did not start its database`);
   return value;

@@ -3,7 +3,7 @@ import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { Server as SocketServer } from 'socket.io';
+import type { Server as SocketServer } from 'socket.io';
 import { agent as createAgent } from 'supertest';
 import { createApp } from '@/server/app';
 import { FirstVisit } from '@/server/auth/first-visit';

@@ -1,4 +1,4 @@
-import { buildMember, TEST_PASSWORD } from '../../support/factories';
+import { buildMember } from '../../support/factories';
 import { startTestServer, type TestServer } from '../../support/test-server';
 
 let server: TestServer;

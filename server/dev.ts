@@ -1,0 +1,4 @@
+import { openExpoFront } from './local/expo-front';
+import { run } from './run';
+
+void run(openExpoFront);
