@@ -16,8 +16,10 @@ export function rolesColumn(): ModelAttributeColumnOptions {
   return {
     type: DataTypes.STRING(120),
     allowNull: false,
-    get(this: Model): readonly Role[] {
-      return parseRoles(this.getDataValue('roles') as string);
+    // Undefined while a row is built only to say what an update changes.
+    get(this: Model): readonly Role[] | undefined {
+      const text = this.getDataValue('roles') as string | undefined;
+      return text === undefined ? undefined : parseRoles(text);
     },
     set(this: Model, roles: readonly Role[]) {
       this.setDataValue('roles', formatRoles(roles));
