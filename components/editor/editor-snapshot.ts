@@ -3,6 +3,7 @@ import type { Layout } from '@/shared/api/layouts';
 import type { Refusal } from '@/shared/errors';
 import type { Estimate, Reason } from '@/shared/estimate/estimate-result';
 import type { AntennaPart, LayoutDocument, Point } from '@/shared/layout/document';
+import type { Change } from '@/shared/layout/operation';
 
 /** How the line to the server stands. Editing goes on while `offline`; nothing is taken while `outdated` or `refused`. */
 export type Connection =
@@ -79,6 +80,8 @@ export type Notice = {
   readonly code: Refusal['code'] | null;
   /** Every problem with its path, where there are some. */
   readonly problems: readonly { readonly path: string; readonly message: string }[];
+  /** What was refused or dropped, so that it can be tried again; null when there is nothing to try. */
+  readonly changes: readonly Change[] | null;
 };
 
 /** How this client's numbers stand to the server's for the same document. */
