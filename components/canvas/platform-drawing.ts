@@ -5,7 +5,7 @@ import { dimensionAlong, type Dimension } from './dimension';
 import { drawnLength } from './drawn-length';
 import { hatchLines } from './hatch';
 import { boxAt, type ScreenBox } from './label-placement';
-import { circlePath, crossPath, linesPath, outlinePath } from './paths';
+import { boxPath, circlePath, crossPath, linesPath, outlinePath } from './paths';
 import type { LengthUnit } from './round-length';
 import { fitText, textWidth } from './text-width';
 import { toScreen, type ScreenPoint, type Viewport } from './viewport';
@@ -42,6 +42,8 @@ export type PlatformDrawing = {
   readonly forward: string;
   readonly dimensions: readonly Dimension[];
   readonly texts: readonly PlanText[];
+  /** Paper under the texts on hatched areas. */
+  readonly textGrounds: string;
 };
 
 /** Draws the platform as it lies on the canvas. */
@@ -53,6 +55,7 @@ export function drawPlatform(drawn: DrawnPlatform, view: Viewport, unit: LengthU
   const keepOuts = Object.values(drawn.keepOuts).map((keepOut) => onScreen(keepOut.outline));
   const datum = toScreen(view, { x: 0, y: 0 });
   const { mark } = drawing;
+  const written = bodyTexts(drawn, view, unit);
   return {
     outline: path(platform.outline),
     conducting: surfaces.flatMap((surface) => (surface.conducting ? path(surface.outline) : [])).join(''),
@@ -74,7 +77,12 @@ export function drawPlatform(drawn: DrawnPlatform, view: Viewport, unit: LengthU
     centreLine: platform.kind === 'rooftop' ? '' : centreLine(drawn, view),
     datumRing: circlePath(datum, drawing.datum.ring),
     datumCross: crossPath(datum, 0, drawing.datum.cross),
-    ...forwardArrow(drawn, view, unit),
+    ...forwardArrow(drawn, view, written),
+    dimensions: outerDimensions(drawn, view, unit),
+    textGrounds: written
+      .filter(({ key }) => key in drawn.keepOuts)
+      .map(({ box }) => boxPath(box))
+      .join(''),
   };
 }
 
@@ -87,7 +95,7 @@ function centreLine({ platform }: DrawnPlatform, view: Viewport): string {
   return linesPath([{ x1: from.x, y1: from.y, x2: to.x, y2: to.y }]);
 }
 
-function forwardArrow(drawn: DrawnPlatform, view: Viewport, unit: LengthUnit) {
+function forwardArrow(drawn: DrawnPlatform, view: Viewport, written: readonly PlanText[]) {
   const box = boxAround(drawn.platform.outline);
   const middle = (box.minY + box.maxY) / 2;
   const front = toScreen(view, { x: box.maxX, y: middle });
@@ -121,8 +129,7 @@ function forwardArrow(drawn: DrawnPlatform, view: Viewport, unit: LengthUnit) {
   };
   return {
     forward: linesPath(lines),
-    dimensions: outerDimensions(drawn, view, unit),
-    texts: [forwardText, ...bodyTexts(drawn, view, unit)],
+    texts: [forwardText, ...written],
   };
 }
 
