@@ -1,7 +1,7 @@
 import { gaussLegendre } from '../numerics/gauss-legendre';
 import { chainMirrored, type Chain } from './chain';
 import { freeSpaceImpedance } from './constants';
-import type { Ground, Vector3 } from './scene';
+import type { Complex, Ground, Vector3 } from './scene';
 
 /** Peak-referred node currents on a chain, ampere: hats sin k(d - |s - s_i|), half a hat at the ends. */
 export type ChainCurrent = { readonly chain: Chain; readonly re: Float64Array; readonly im: Float64Array };
@@ -21,11 +21,37 @@ export function radiationIntensity(
   direction: Vector3,
 ): number {
   const n = new Float64Array(6);
-  for (const current of currents) {
-    addRadiation(k, current.chain, current, 1, direction, n);
-    if (ground === 'plane') addRadiation(k, chainMirrored(current.chain), current, -1, direction, n);
-  }
-  return intensityOf(k, n, direction);
+  for (const current of currents) addRadiationVector(k, ground, current, direction, n);
+  const { theta, phi } = transverseParts(n, direction);
+  return intensityOf(k, theta.re ** 2 + theta.im ** 2 + phi.re ** 2 + phi.im ** 2);
+}
+
+/** Adds a chain's radiation vector, its image's included, to n (x, y, z; real and imaginary in turn). */
+export function addRadiationVector(
+  k: number,
+  ground: Ground,
+  current: ChainCurrent,
+  direction: Vector3,
+  n: Float64Array,
+): void {
+  addRadiation(k, current.chain, current, 1, direction, n);
+  if (ground === 'plane') addRadiation(k, chainMirrored(current.chain), current, -1, direction, n);
+}
+
+/** The parts of a radiation vector across the direction: along falling elevation and along rising azimuth. */
+export function transverseParts(n: Float64Array, direction: Vector3): { theta: Complex; phi: Complex } {
+  const [rx, ry, rz] = direction;
+  const flat = Math.hypot(rx, ry);
+  // Straight up, azimuth is anything: x serves.
+  const c = flat > 0 ? rx / flat : 1;
+  const s = flat > 0 ? ry / flat : 0;
+  const part = (at: number) => ({
+    theta: rz * (c * n[at]! + s * n[2 + at]!) - flat * n[4 + at]!,
+    phi: c * n[2 + at]! - s * n[at]!,
+  });
+  const re = part(0);
+  const im = part(1);
+  return { theta: { re: re.theta, im: im.theta }, phi: { re: re.phi, im: im.phi } };
 }
 
 /** Unit vector toward an azimuth (from +x toward +y) and elevation, degrees. */
@@ -36,15 +62,9 @@ export function directionOf(azimuthDeg: number, elevationDeg: number): Vector3 {
   return [flat * Math.cos(azimuth), flat * Math.sin(azimuth), Math.sin(elevation)];
 }
 
-/** U of a radiation vector (x, y, z; real and imaginary in turn), watt per steradian. */
-export function intensityOf(k: number, n: Float64Array, direction: Vector3): number {
-  const [rx, ry, rz] = direction;
-  const alongRe = n[0]! * rx + n[2]! * ry + n[4]! * rz;
-  const alongIm = n[1]! * rx + n[3]! * ry + n[5]! * rz;
-  const total = n[0]! ** 2 + n[1]! ** 2 + n[2]! ** 2 + n[3]! ** 2 + n[4]! ** 2 + n[5]! ** 2;
-  // Rounding may leave a hair below zero where nothing is radiated.
-  const across = Math.max(0, total - alongRe ** 2 - alongIm ** 2);
-  return (freeSpaceImpedance * k * k * across) / (32 * Math.PI ** 2);
+/** U, watt per steradian, of |N|^2 across the direction, square ampere metres. */
+export function intensityOf(k: number, squaredAcross: number): number {
+  return (freeSpaceImpedance * k * k * squaredAcross) / (32 * Math.PI ** 2);
 }
 
 /** Adds `factor` times the chain's radiation vector to n. */

@@ -1,6 +1,11 @@
-import type { ComplexMatrix } from '../../numerics/complex-matrix';
+import { createComplexMatrix, type ComplexMatrix } from '../../numerics/complex-matrix';
+import { greatestIsolationDb, loadOf } from '../network';
 import type { Complex, Ground, Pattern, PatternRequest, ValidityEntry, Wire } from '../scene';
-import type { OwnCurrentCache } from './own-current-cache';
+import { pairValidity, validityOf, wireValidity } from '../validity';
+import { bringUpToDate, createFrequencySystem, type FrequencySystem } from './frequency-system';
+import { livePattern, solveAlone, type RadiationCache } from './live-pattern';
+import { createOwnCurrentCache, type OwnCurrentCache } from './own-current-cache';
+import { changePlaced, type PlacedWire } from './placed-wire';
 
 export type LiveSolverInput = {
   readonly ground: Ground;
@@ -15,8 +20,8 @@ export type LiveSolverInput = {
 export interface LiveSolver {
   readonly frequencies: readonly number[];
   /**
-   * Replaces the wires; only what belongs to changed wires is computed again. The answers equal those of a
-   * new solver of the same wires.
+   * Replaces the wires; only what belongs to changed wires is computed again, and that when a question asks
+   * for it. The answers equal those of a new solver of the same wires.
    */
   update(wires: readonly Wire[]): void;
   /** -20 lg |S_ij| from one port into another, dB, at most 300. @throws RangeError for a wire without a port */
@@ -37,5 +42,135 @@ export interface LiveSolver {
 
 /** Makes the solver of the wires on that ground at those frequencies (hertz). */
 export function createLiveSolver(input: LiveSolverInput): LiveSolver {
-  throw new Error(`live solver of ${input.wires.length} wires: not built yet`);
+  return new OwnCurrentSolver(input);
+}
+
+class OwnCurrentSolver implements LiveSolver {
+  readonly frequencies: readonly number[];
+  private readonly ground: Ground;
+  private readonly systems: FrequencySystem[];
+  private readonly radiation: RadiationCache[];
+  private placed: PlacedWire[] = [];
+  private readonly indexOf = new Map<string, number>();
+
+  constructor({ ground, frequencies, wires, cache = createOwnCurrentCache() }: LiveSolverInput) {
+    this.ground = ground;
+    this.frequencies = frequencies;
+    this.systems = frequencies.map((frequency) => createFrequencySystem(ground, frequency, cache));
+    this.radiation = frequencies.map(() => new Map());
+    this.update(wires);
+  }
+
+  update(wires: readonly Wire[]): void {
+    const sameIds =
+      wires.length === this.placed.length && wires.every((wire, i) => wire.id === this.placed[i]!.wire.id);
+    if (!sameIds) this.takeIds(wires);
+    wires.forEach((wire, i) => changePlaced(this.placed[i]!, wire, this.ground));
+  }
+
+  isolationDb(frequencyIndex: number, into: string, from: string): number {
+    const system = this.systemAt(frequencyIndex);
+    const i = this.portOf(system, into);
+    const j = this.portOf(system, from);
+    const y = system.network!.loadedAdmittance;
+    const re = y.re[i * y.columns + j]!;
+    const im = y.im[i * y.columns + j]!;
+    const scale = 4 * this.loadAt(into).re * this.loadAt(from).re;
+    return Math.min(greatestIsolationDb, -10 * Math.log10(scale * (re * re + im * im)));
+  }
+
+  loadedAdmittance(frequencyIndex: number): ComplexMatrix {
+    const system = this.systemAt(frequencyIndex);
+    const ports = system.portOf.filter((port) => port >= 0);
+    const result = createComplexMatrix(ports.length, ports.length);
+    const y = system.network?.loadedAdmittance;
+    if (y === undefined) return result;
+    ports.forEach((from, i) => {
+      ports.forEach((to, j) => {
+        result.re[i * ports.length + j] = y.re[from * y.columns + to]!;
+        result.im[i * ports.length + j] = y.im[from * y.columns + to]!;
+      });
+    });
+    return result;
+  }
+
+  impedanceInPlace(frequencyIndex: number, wire: string): Complex {
+    const system = this.systemAt(frequencyIndex);
+    const port = this.portOf(system, wire);
+    const y = system.network!.loadedAdmittance;
+    const at = port * y.columns + port;
+    return behindLoad({ re: y.re[at]!, im: y.im[at]! }, this.loadAt(wire));
+  }
+
+  impedanceAlone(frequencyIndex: number, wire: string): Complex {
+    const system = this.systemAt(frequencyIndex);
+    const slot = system.slots[this.wireIndex(wire)]!;
+    const load = loadOf(slot.wire);
+    return behindLoad(solveAlone(slot, load).admittance, load);
+  }
+
+  pattern(frequencyIndex: number, wire: string, request: PatternRequest): Pattern {
+    const system = this.systemAt(frequencyIndex);
+    return livePattern(system, this.radiation[frequencyIndex]!, this.wireIndex(wire), request);
+  }
+
+  validity(frequencyIndex: number): readonly ValidityEntry[] {
+    const system = this.systemAt(frequencyIndex);
+    const steps = new Map(system.slots.map((slot) => [slot.wire, slot.own.mesh.chain.step]));
+    const wires = this.placed.map(({ wire }) => wire);
+    return validityOf(wires, system.frequency, 'live', (wire) => steps.get(wire)!);
+  }
+
+  pairNotHeld(frequencyIndex: number, one: string, other: string): ValidityEntry | null {
+    const system = this.systemAt(frequencyIndex);
+    const slots = [system.slots[this.wireIndex(one)]!, system.slots[this.wireIndex(other)]!];
+    for (const { wire, own } of slots) {
+      const entry = wireValidity(wire, system.frequency, 'live', own.mesh.chain.step)[0];
+      if (entry !== undefined) return entry;
+    }
+    return pairValidity(slots[0]!.wire, slots[1]!.wire);
+  }
+
+  private takeIds(wires: readonly Wire[]): void {
+    const known = new Map(this.placed.map((placed) => [placed.wire.id, placed]));
+    this.placed = wires.map((wire) => known.get(wire.id) ?? { wire, place: 0, kind: 0 });
+    this.indexOf.clear();
+    wires.forEach((wire, i) => {
+      if (this.indexOf.has(wire.id)) throw new RangeError(`two wires have the id ${wire.id}`);
+      this.indexOf.set(wire.id, i);
+    });
+    const present = new Set(this.placed);
+    for (const cache of this.radiation) {
+      for (const slot of cache.keys()) if (!present.has(slot.placed)) cache.delete(slot);
+    }
+  }
+
+  private systemAt(frequencyIndex: number): FrequencySystem {
+    const system = this.systems[frequencyIndex];
+    if (system === undefined) throw new RangeError(`no frequency of index ${frequencyIndex}`);
+    bringUpToDate(system, this.placed);
+    return system;
+  }
+
+  private wireIndex(id: string): number {
+    const index = this.indexOf.get(id);
+    if (index === undefined) throw new RangeError(`no wire ${id}`);
+    return index;
+  }
+
+  private portOf(system: FrequencySystem, id: string): number {
+    const port = system.portOf[this.wireIndex(id)]!;
+    if (port < 0) throw new RangeError(`wire ${id} has no port`);
+    return port;
+  }
+
+  private loadAt(id: string): Complex {
+    return loadOf(this.placed[this.wireIndex(id)]!.wire);
+  }
+}
+
+/** 1 / Y - g. */
+function behindLoad(admittance: Complex, load: Complex): Complex {
+  const square = admittance.re ** 2 + admittance.im ** 2;
+  return { re: admittance.re / square - load.re, im: -admittance.im / square - load.im };
 }

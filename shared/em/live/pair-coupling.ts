@@ -1,0 +1,111 @@
+import { chainOfWire } from '../chain';
+import { mutualBlock } from '../impedance-block';
+import type { WireMesh } from '../mesh';
+import type { Ground, Wire } from '../scene';
+import type { OwnCurrents } from './own-currents';
+import { coupleVertical, evaluateCoupling, type VerticalCoupling } from './vertical-coupling';
+import { gridLevel, gridStep, sampleVertical, type VerticalSamples } from './vertical-samples';
+
+/** One wire as the couplings see it. */
+export type CouplingSide = {
+  wire: Wire;
+  own: OwnCurrents;
+  /** 1 up, -1 down, 0 in any other direction. */
+  sense: 1 | -1 | 0;
+  /** Samples by grid level; emptied when the kind changes. */
+  readonly samples: Map<number, VerticalSamples>;
+};
+
+/** Impedances, ohm, of the functions of two wires: those of `first` by those of `second`, row-major. */
+export type PairCoupling = {
+  re: Float64Array;
+  im: Float64Array;
+  /** Coefficients by grid level; emptied when one of the kinds changes. */
+  readonly tables: Map<number, VerticalCoupling>;
+};
+
+/** Beyond so many grid points per wire the general quadrature is cheaper than the common grid. */
+const mostGridPoints = 400;
+
+/** Room for the coupling of two wires. */
+export function createPairCoupling(first: CouplingSide, second: CouplingSide): PairCoupling {
+  const size = first.own.count * second.own.count;
+  return { re: new Float64Array(size), im: new Float64Array(size), tables: new Map() };
+}
+
+/** Computes the coupling for where the wires stand now; no allocation once a pair of vertical wires is warm. */
+export function updatePairCoupling(
+  ground: Ground,
+  first: CouplingSide,
+  second: CouplingSide,
+  pair: PairCoupling,
+): void {
+  if (first.sense !== 0 && second.sense !== 0) {
+    const dx = second.wire.start[0] - first.wire.start[0];
+    const dy = second.wire.start[1] - first.wire.start[1];
+    const distance = Math.sqrt(dx * dx + dy * dy);
+    const lambda = (2 * Math.PI) / first.own.k;
+    const level = gridLevel(lambda, distance);
+    if (Number.isFinite(level) && longest(first, second) <= mostGridPoints * gridStep(lambda, level)) {
+      evaluateCoupling(tableOf(ground, first, second, pair, level), distance, pair.re, pair.im);
+      return;
+    }
+  }
+  couplePlacedWires(ground, first, second, pair);
+}
+
+function tableOf(
+  ground: Ground,
+  first: CouplingSide,
+  second: CouplingSide,
+  pair: PairCoupling,
+  level: number,
+): VerticalCoupling {
+  const kept = pair.tables.get(level);
+  if (kept !== undefined) return kept;
+  const table = coupleVertical(first.own.k, ground, samplesOf(first, level), samplesOf(second, level));
+  pair.tables.set(level, table);
+  return table;
+}
+
+function samplesOf(side: CouplingSide, level: number): VerticalSamples {
+  const kept = side.samples.get(level);
+  if (kept !== undefined) return kept;
+  const samples = sampleVertical(side.own, side.wire.start[2], side.sense === -1 ? -1 : 1, level);
+  side.samples.set(level, samples);
+  return samples;
+}
+
+function longest(first: CouplingSide, second: CouplingSide): number {
+  const a = first.own.mesh.chain;
+  const b = second.own.mesh.chain;
+  return Math.max(a.step * a.segments, b.step * b.segments);
+}
+
+/** Wires in any direction: the kernel between all nodes, then reduced to the functions. */
+function couplePlacedWires(ground: Ground, first: CouplingSide, second: CouplingSide, pair: PairCoupling): void {
+  const block = mutualBlock(first.own.k, ground, placedMesh(first), placedMesh(second));
+  const { count: m, functions: phi } = first.own;
+  const { count: n, functions: psi } = second.own;
+  pair.re.fill(0);
+  pair.im.fill(0);
+  for (let i = 0; i < block.rows; i += 1) {
+    for (let b = 0; b < n; b += 1) {
+      let re = 0;
+      let im = 0;
+      for (let j = 0; j < block.columns; j += 1) {
+        re += block.re[i * block.columns + j]! * psi[j * n + b]!;
+        im += block.im[i * block.columns + j]! * psi[j * n + b]!;
+      }
+      for (let a = 0; a < m; a += 1) {
+        pair.re[a * n + b]! += phi[i * m + a]! * re;
+        pair.im[a * n + b]! += phi[i * m + a]! * im;
+      }
+    }
+  }
+}
+
+/** The functions belong to a kind; the mesh is laid where this wire stands. */
+function placedMesh(side: CouplingSide): WireMesh {
+  return { ...side.own.mesh, wire: side.wire, chain: chainOfWire(side.wire, side.own.mesh.chain.segments) };
+}

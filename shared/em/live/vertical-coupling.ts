@@ -1,0 +1,97 @@
+import { freeSpaceImpedance } from '../constants';
+import type { Ground } from '../scene';
+import type { VerticalSamples } from './vertical-samples';
+
+/**
+ * The coupling of two vertical wires as a function of their distance alone:
+ * Z_mn(d) = j (eta / 4 pi) sum_q C_mn,q e^{-jkR_q} / R_q with R_q = sqrt(d^2 + u_q^2) over the few height
+ * differences (and, with the plane, height sums) u_q that occur on the common grid.
+ */
+export type VerticalCoupling = {
+  readonly k: number;
+  /** Functions of the source wire by functions of the receiving wire, row-major within each q. */
+  readonly size: number;
+  /** u_q^2, square metres. */
+  readonly heightsSquared: Float64Array;
+  readonly coefficients: Float64Array;
+};
+
+/** Gathers the coefficients C: what two wires' samples have in common at each height difference and sum. */
+export function coupleVertical(
+  k: number,
+  ground: Ground,
+  source: VerticalSamples,
+  receiver: VerticalSamples,
+): VerticalCoupling {
+  const size = source.count * receiver.count;
+  const reach = Math.max(
+    Math.abs(receiver.first + receiver.points - source.first),
+    Math.abs(source.first + source.points - receiver.first),
+    ground === 'plane' ? Math.abs(source.first + source.points + receiver.first + receiver.points) : 0,
+    ground === 'plane' ? Math.abs(source.first + receiver.first) : 0,
+  );
+  const dense = new Float64Array((reach + 1) * size);
+  for (let a = 0; a < source.points; a += 1) {
+    for (let b = 0; b < receiver.points; b += 1) {
+      const difference = Math.abs(receiver.first + b - source.first - a);
+      addProducts(source, a, receiver, b, dense, difference * size);
+      if (ground === 'none') continue;
+      addProducts(source, a, receiver, b, dense, Math.abs(receiver.first + b + source.first + a) * size);
+    }
+  }
+  return compact(k, size, source.step, dense, reach + 1);
+}
+
+/** Writes the impedances, ohm, of the two wires' functions at a distance (metres) into re and im. */
+export function evaluateCoupling(
+  coupling: VerticalCoupling,
+  distance: number,
+  re: Float64Array,
+  im: Float64Array,
+): void {
+  const { k, size, heightsSquared, coefficients } = coupling;
+  re.fill(0);
+  im.fill(0);
+  const distanceSquared = distance * distance;
+  const scale = freeSpaceImpedance / (4 * Math.PI);
+  for (let q = 0, at = 0; q < heightsSquared.length; q += 1) {
+    const r = Math.sqrt(distanceSquared + heightsSquared[q]!);
+    const over = scale / r;
+    const gr = over * Math.sin(k * r);
+    const gi = over * Math.cos(k * r);
+    for (let e = 0; e < size; e += 1, at += 1) {
+      const c = coefficients[at]!;
+      re[e]! += c * gr;
+      im[e]! += c * gi;
+    }
+  }
+}
+
+function addProducts(
+  source: VerticalSamples,
+  a: number,
+  receiver: VerticalSamples,
+  b: number,
+  dense: Float64Array,
+  at: number,
+): void {
+  let next = at;
+  for (let m = 0; m < source.count; m += 1) {
+    const weight = source.sources[a * source.count + m]!;
+    for (let n = 0; n < receiver.count; n += 1, next += 1) {
+      dense[next]! += weight * receiver.receivers[b * receiver.count + n]!;
+    }
+  }
+}
+
+/** Leaves out the heights that never occur (between the differences and the sums of high-standing wires). */
+function compact(k: number, size: number, step: number, dense: Float64Array, heights: number): VerticalCoupling {
+  const used: number[] = [];
+  for (let q = 0; q < heights; q += 1) {
+    if (dense.subarray(q * size, (q + 1) * size).some((value) => value !== 0)) used.push(q);
+  }
+  const heightsSquared = Float64Array.from(used, (q) => (q * step) ** 2);
+  const coefficients = new Float64Array(used.length * size);
+  used.forEach((q, i) => coefficients.set(dense.subarray(q * size, (q + 1) * size), i * size));
+  return { k, size, heightsSquared, coefficients };
+}

@@ -1,0 +1,96 @@
+import { gaussLegendre } from '../../numerics/gauss-legendre';
+import type { OwnCurrents } from './own-currents';
+
+/**
+ * A vertical wire's functions as equivalent sources and receivers on the heights i h that all vertical wires
+ * share at one frequency. Between two wires at distance d the kernel e^{-jkR}/R then depends on i - j and, for
+ * the image, on i + j alone. Sources are the node waves' weights (reaction.ts), receivers the current itself;
+ * both are brought to the grid by Lagrange interpolation of the kernel, so that the ends need no grid point.
+ * @source interpolation onto a regular grid: Bleszynski, Bleszynski and Jaroszewicz 1996
+ */
+export type VerticalSamples = {
+  /** Grid step, metres. */
+  readonly step: number;
+  /** Index of the first grid height; the height is index * step above the reference. */
+  readonly first: number;
+  readonly points: number;
+  readonly count: number;
+  /** Points by functions, row-major: jumps of I'/k, positive upward. */
+  readonly sources: Float64Array;
+  /** Points by functions, row-major: integral of the current times the interpolating polynomial, metres. */
+  readonly receivers: Float64Array;
+};
+
+/** Points of an interpolation; the kernel needs them within a distance that makes it smooth (`gridStep`). */
+const stencil = 8;
+/** Grid steps per wavelength and per distance that keep the interpolated kernel within 1e-4. */
+const stepsPerWavelength = 10;
+const stepsPerDistance = 4;
+
+const segmentRule = gaussLegendre(4);
+
+/** Level of the grid for a distance: the step is a tenth of a wavelength halved `level` times. */
+export function gridLevel(wavelength: number, distance: number): number {
+  const coarsest = wavelength / stepsPerWavelength;
+  return Math.max(0, Math.ceil(Math.log2((coarsest * stepsPerDistance) / distance)));
+}
+
+/** The grid's step at a level, metres. */
+export function gridStep(wavelength: number, level: number): number {
+  return wavelength / stepsPerWavelength / 2 ** level;
+}
+
+/**
+ * Samples a vertical wire's functions on the grid of that level. `start` is the height of its start, metres;
+ * `up` is 1 when the wire runs upward from there, -1 when downward.
+ */
+export function sampleVertical(own: OwnCurrents, start: number, up: 1 | -1, level: number): VerticalSamples {
+  const { chain } = own.mesh;
+  const k = own.k;
+  const step = gridStep((2 * Math.PI) / k, level);
+  const rise = up * chain.step;
+  const top = start + rise * chain.segments;
+  const first = Math.floor(Math.min(start, top) / step) - stencil / 2 + 1;
+  const points = Math.floor(Math.max(start, top) / step) + stencil / 2 - first + 1;
+  const sources = new Float64Array(points * own.count);
+  const receivers = new Float64Array(points * own.count);
+  const { count, functions } = own;
+  const c = Math.cos(k * chain.step);
+  const weights = new Float64Array(stencil);
+  for (let i = 0; i <= chain.segments; i += 1) {
+    const from = lagrange((start + i * rise) / step, weights) - first;
+    const ends = (i > 0 ? 1 : 0) + (i < chain.segments ? 1 : 0);
+    for (let m = 0; m < count; m += 1) {
+      let jump = -ends * c * functions[i * count + m]!;
+      if (i > 0) jump += functions[(i - 1) * count + m]!;
+      if (i < chain.segments) jump += functions[(i + 1) * count + m]!;
+      for (let g = 0; g < stencil; g += 1) sources[(from + g) * count + m]! += up * jump * weights[g]!;
+    }
+  }
+  for (let p = 0; p < chain.segments; p += 1) {
+    for (let q = 0; q < segmentRule.nodes.length; q += 1) {
+      const s = chain.step * segmentRule.nodes[q]!;
+      const weight = up * chain.step * segmentRule.weights[q]!;
+      const from = lagrange((start + p * rise + up * s) / step, weights) - first;
+      const falling = weight * Math.sin(k * (chain.step - s));
+      const rising = weight * Math.sin(k * s);
+      for (let m = 0; m < count; m += 1) {
+        const current = falling * functions[p * count + m]! + rising * functions[(p + 1) * count + m]!;
+        for (let g = 0; g < stencil; g += 1) receivers[(from + g) * count + m]! += current * weights[g]!;
+      }
+    }
+  }
+  return { step, first, points, count, sources, receivers };
+}
+
+/** Lagrange weights of the grid points around position x (in steps); gives the index of the first of them. */
+function lagrange(x: number, weights: Float64Array): number {
+  const from = Math.floor(x) - stencil / 2 + 1;
+  const t = x - from;
+  for (let a = 0; a < stencil; a += 1) {
+    let weight = 1;
+    for (let b = 0; b < stencil; b += 1) if (b !== a) weight *= (t - b) / (a - b);
+    weights[a] = weight;
+  }
+  return from;
+}
