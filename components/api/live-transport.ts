@@ -36,7 +36,11 @@ export type JoinQuestion = {
   readonly version: number;
 };
 
-export type MissedOperations = { readonly items: readonly CommittedOperation[]; readonly sequence: number };
+export type MissedOperations = {
+  readonly ok: true;
+  readonly items: readonly CommittedOperation[];
+  readonly sequence: number;
+};
 
 /** The editor's line to the server; questions are answered with a value or `LOST`, never by throwing. */
 export interface EditorTransport {

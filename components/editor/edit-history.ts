@@ -91,8 +91,8 @@ function objectName(document: LayoutDocument, { collection, id }: UndoConflict):
   if (collection === 'platform') return 'The platform';
   const object = id === null ? undefined : collectionOf(document, collection)[id];
   if (!object) return null;
-  if ('label' in object) return object.label;
-  return 'name' in object ? object.name : null;
+  if ('label' in object && typeof object.label === 'string') return object.label;
+  return 'name' in object && typeof object.name === 'string' ? object.name : null;
 }
 
 function wordOf({ collection }: UndoConflict): string {
