@@ -19,6 +19,8 @@ export type RunStatement = (statement: string) => Promise<void>;
 export interface MigrationOptions {
   /** Called before pending migrations touch a database that already holds some. */
   readonly beforeChange?: (pending: readonly string[]) => Promise<void>;
+  /** The last migration to apply; left out, all of them. */
+  readonly upTo?: string;
 }
 
 /**
@@ -28,11 +30,13 @@ export interface MigrationOptions {
 export async function migrate(owner: Sequelize, options: MigrationOptions = {}): Promise<readonly string[]> {
   return withMigrationLock(owner, async () => {
     const umzug = createUmzug(owner);
-    const pending = (await umzug.pending()).map((migration) => migration.name);
+    const pending = (await umzug.pending())
+      .map((migration) => migration.name)
+      .filter((name) => options.upTo === undefined || name <= options.upTo);
     if (pending.length === 0) return [];
     const executed = await umzug.executed();
     if (executed.length > 0 && options.beforeChange) await options.beforeChange(pending);
-    await umzug.up();
+    await umzug.up({ migrations: pending });
     return pending;
   });
 }

@@ -1,6 +1,6 @@
 import type { Sequelize } from 'sequelize';
 import { deriveDemoPassword } from '../../auth/demo-accounts';
-import { hashPassword } from '../../auth/password';
+import { hashRandomPassword } from '../../auth/password';
 import { Membership } from '../../models/membership';
 import { Person } from '../../models/person';
 import { Team } from '../../models/team';
@@ -19,7 +19,7 @@ export async function loadDemo(sequelize: Sequelize, sessionSecret: string): Pro
       name,
       email,
       roles,
-      passwordHash: await hashPassword(deriveDemoPassword(sessionSecret, email)),
+      passwordHash: await hashRandomPassword(deriveDemoPassword(sessionSecret, email)),
     })),
   );
   await transact(sequelize, async (transaction) => {
