@@ -2,6 +2,7 @@ import type { Logger } from 'pino';
 import type { Sequelize } from 'sequelize';
 import type { FirstVisit } from './auth/first-visit';
 import type { SocketRevocation } from './auth/socket-revocation';
+import type { LiveLayouts } from './collaboration/live-layouts';
 import type { Config } from './config/config';
 import type { Mailer } from './mail/mailer';
 import type { RateLimits } from './middleware/limit-rate';
@@ -13,6 +14,8 @@ export interface Services {
   /** The application's connection; never the owner's. */
   readonly sequelize: Sequelize;
   readonly revocation: SocketRevocation;
+  /** The open layouts, and what their watchers hear. */
+  readonly live: LiveLayouts;
   readonly firstVisit: FirstVisit;
   readonly mailer: Mailer;
   readonly limits: RateLimits;

@@ -7,6 +7,7 @@ import { sweepSessions } from './auth/end-sessions';
 import { FirstVisit } from './auth/first-visit';
 import { SocketRevocation } from './auth/socket-revocation';
 import { attachCollaboration } from './collaboration/attach';
+import { LiveLayouts } from './collaboration/live-layouts';
 import type { Config } from './config/config';
 import { openDataFolder, readSessionSecret, type DataFolder } from './config/data-folder';
 import { openLog } from './config/logger';
@@ -108,6 +109,7 @@ async function startSteps(
     log,
     sequelize,
     revocation: new SocketRevocation(),
+    live: new LiveLayouts({ sequelize, log }),
     firstVisit: new FirstVisit(),
     mailer,
     limits: DEFAULT_RATE_LIMITS,
@@ -182,12 +184,15 @@ async function announce(services: Services, url: string, keepsMail: boolean, say
   for (const warning of config.warnings) say(`Warning: ${warning}`);
   if (keepsMail && !config.demo)
     say('Warning: SMTP_URL is not set: mail is kept in the database and not sent.');
-  say(`Elbowroom is ready at ${url}`);
   const accounts = await listDemoAccounts(services);
-  if (accounts.length > 0) say('Demo sign-ins:');
-  for (const { email, password, roles } of accounts) say(`  ${email}  ${password}  (${roles.join(', ')})`);
-  if ((await Person.count()) === 0)
-    say(`First visit: make your team with the code ${services.firstVisit.code}`);
+  const lines = accounts.map(
+    ({ email, password, roles }) => `  ${email}  ${password}  (${roles.join(', ')})`,
+  );
+  if (lines.length > 0) lines.unshift('Demo sign-ins:');
+  if ((await Person.count()) === 0) {
+    lines.push(`First visit: make your team with the code ${services.firstVisit.code}`);
+  }
+  say([`Elbowroom is ready at ${url}`, ...lines].join('\n'));
 }
 
 async function keepMail(message: { recipient: string; subject: string; text: string }): Promise<void> {

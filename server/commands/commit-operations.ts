@@ -7,6 +7,7 @@ import { accept, refuse, type Result } from '@/shared/errors';
 import type { LayoutDocument } from '@/shared/layout/document';
 import type { CommittedOperation, Operation } from '@/shared/layout/operation';
 import { applyOperation } from '@/shared/layout/operations';
+import { touchJob } from './touch-job';
 
 /** A layout after its first `sequence` operations. */
 export interface LayoutState {
@@ -59,7 +60,7 @@ export async function commitOperations(
     const before = await lockState(sequelize, target, transaction);
     const places = await findPlaces(target.layoutId, entries, transaction);
     const outcome = applyEntries(target.layoutId, before, entries, places, new Date());
-    if (outcome.committed.length > 0) await write(sequelize, target, outcome, transaction);
+    if (outcome.committed.length > 0) await write(target, outcome, transaction);
     return outcome;
   });
 }
@@ -125,12 +126,7 @@ function applyEntries(
   return { state: { document, sequence }, answers, committed, texts };
 }
 
-async function write(
-  sequelize: Sequelize,
-  target: CommitTarget,
-  outcome: Applied,
-  transaction: Transaction,
-): Promise<void> {
+async function write(target: CommitTarget, outcome: Applied, transaction: Transaction): Promise<void> {
   const { layoutId, touchedJobId } = target;
   await OperationRow.bulkCreate(
     outcome.committed.map(({ sequence, operation, memberId, memberName, committedAt }, index) => ({
@@ -149,11 +145,5 @@ async function write(
     { document: encodeDocument(outcome.state.document), sequence: outcome.state.sequence },
     { where: { id: layoutId }, transaction },
   );
-  if (touchedJobId !== null) {
-    await sequelize.query('UPDATE jobs SET updated_at = ? WHERE id = ?', {
-      replacements: [new Date(), touchedJobId],
-      type: QueryTypes.UPDATE,
-      transaction,
-    });
-  }
+  if (touchedJobId !== null) await touchJob(touchedJobId, transaction);
 }

@@ -12,7 +12,10 @@ import { idColumn } from './columns';
 import { Membership } from './membership';
 
 /** An answer in a comment's thread. */
-export class CommentReplyRow extends Model<InferAttributes<CommentReplyRow>, InferCreationAttributes<CommentReplyRow>> {
+export class CommentReplyRow extends Model<
+  InferAttributes<CommentReplyRow>,
+  InferCreationAttributes<CommentReplyRow>
+> {
   declare id: CreationOptional<string>;
   declare commentId: string;
   declare text: string;

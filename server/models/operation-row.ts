@@ -1,9 +1,18 @@
-import { DataTypes, Model, type InferAttributes, type InferCreationAttributes, type Sequelize } from 'sequelize';
+import {
+  DataTypes,
+  Model,
+  type InferAttributes,
+  type InferCreationAttributes,
+  type Sequelize,
+} from 'sequelize';
 import type { CommittedOperation, Operation } from '@/shared/layout/operation';
 import { idColumn } from './columns';
 
 /** One operation in the one order of its layout; the table only grows. */
-export class OperationRow extends Model<InferAttributes<OperationRow>, InferCreationAttributes<OperationRow>> {
+export class OperationRow extends Model<
+  InferAttributes<OperationRow>,
+  InferCreationAttributes<OperationRow>
+> {
   declare layoutId: string;
   declare sequence: number;
   declare id: string;
@@ -36,7 +45,11 @@ export class OperationRow extends Model<InferAttributes<OperationRow>, InferCrea
   toCommitted(): CommittedOperation {
     return {
       sequence: this.sequence,
-      operation: { id: this.id, version: this.version, changes: JSON.parse(this.changes) as Operation['changes'] },
+      operation: {
+        id: this.id,
+        version: this.version,
+        changes: JSON.parse(this.changes) as Operation['changes'],
+      },
       memberId: this.memberId,
       memberName: this.memberName,
       committedAt: this.committedAt.toISOString(),

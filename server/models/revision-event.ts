@@ -15,7 +15,10 @@ import { idColumn } from './columns';
 export type RevisionEventKind = (typeof REVISION_EVENTS)[number];
 
 /** One thing that happened to a revision; the table only grows, and each kind happens at most once. */
-export class RevisionEvent extends Model<InferAttributes<RevisionEvent>, InferCreationAttributes<RevisionEvent>> {
+export class RevisionEvent extends Model<
+  InferAttributes<RevisionEvent>,
+  InferCreationAttributes<RevisionEvent>
+> {
   declare id: CreationOptional<number>;
   declare revisionId: string;
   declare kind: RevisionEventKind;

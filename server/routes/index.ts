@@ -6,6 +6,12 @@ import { createMailsRouter } from './mails';
 import { createMembersRouter } from './members';
 import { createPasswordsRouter } from './passwords';
 import { createSessionRouter, createSessionsRouter } from './session';
+import { createCommentsRouter } from './comments';
+import { createJobsRouter } from './jobs';
+import { createLayoutsRouter } from './layouts';
+import { createPartsRouter } from './parts';
+import { createPlatformsRouter } from './platforms';
+import { createRevisionsRouter } from './revisions';
 import { createSetupRouter } from './setup';
 
 /** A resource and where it is. */
@@ -25,5 +31,11 @@ export function listRouters(services: Services): readonly MountedRouter[] {
     { path: '/api/members', router: createMembersRouter(services) },
     { path: '/api/invitations', router: createInvitationsRouter(services) },
     { path: '/api/mails', router: createMailsRouter(services) },
+    { path: '/api/comments', router: createCommentsRouter(services) },
+    { path: '/api/jobs', router: createJobsRouter(services) },
+    { path: '/api/layouts', router: createLayoutsRouter(services) },
+    { path: '/api/parts', router: createPartsRouter() },
+    { path: '/api/platforms', router: createPlatformsRouter(services) },
+    { path: '/api/revisions', router: createRevisionsRouter(services) },
   ];
 }

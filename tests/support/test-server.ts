@@ -9,6 +9,7 @@ import { createApp } from '@/server/app';
 import { FirstVisit } from '@/server/auth/first-visit';
 import { SocketRevocation } from '@/server/auth/socket-revocation';
 import { attachCollaboration } from '@/server/collaboration/attach';
+import { LiveLayouts } from '@/server/collaboration/live-layouts';
 import { parseConfig } from '@/server/config/config';
 import { createLog } from '@/server/config/logger';
 import { Lifecycle } from '@/server/lifecycle';
@@ -68,6 +69,7 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
   const logLines: string[] = [];
   const lifecycle = new Lifecycle();
   let url = '';
+  const log = createLog('debug', { write: (line: string) => logLines.push(line) });
   const services: Services = {
     config: parseConfig({
       PORT: '0',
@@ -76,9 +78,10 @@ export async function startTestServer(options: TestServerOptions = {}): Promise<
       ELBOWROOM_CLIENT: 'none',
       PUBLIC_URL: options.publicUrl,
     }),
-    log: createLog('debug', { write: (line: string) => logLines.push(line) }),
+    log,
     sequelize: database.sequelize,
     revocation: new SocketRevocation(),
+    live: new LiveLayouts({ sequelize: database.sequelize, log }),
     firstVisit: new FirstVisit(),
     mailer: { send: async (mail) => void outbox.push(mail), close: () => undefined },
     limits: { ...WIDE_LIMITS, ...options.limits },
