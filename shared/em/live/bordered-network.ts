@@ -40,9 +40,12 @@ export type BorderedNetwork = {
   /** Port currents per volt among the rest's ports without the border, and with it among all. */
   readonly restAdmittance: ComplexMatrix;
   readonly loadedAdmittance: ComplexMatrix;
-  /** G = k^T P y, rest ports by border functions. */
+  /** V: -G for the rest's ports, then b for the border's own; ports by border functions. */
   readonly linkRe: Float64Array;
   readonly linkIm: Float64Array;
+  /** One row of V S^-1. */
+  readonly rowRe: Float64Array;
+  readonly rowIm: Float64Array;
 };
 
 /** The impedances between two members' functions, row-major, and whether they are stored the other way round. */
@@ -71,8 +74,10 @@ export function createBorderedNetwork(members: readonly NetworkMember[]): Border
     portIm: room(restPorts.length * factors.order),
     restAdmittance: createComplexMatrix(restPorts.length, restPorts.length),
     loadedAdmittance: createComplexMatrix(ports, ports),
-    linkRe: room(restPorts.length * m),
-    linkIm: room(restPorts.length * m),
+    linkRe: room(ports * m),
+    linkIm: room(ports * m),
+    rowRe: room(m),
+    rowIm: room(m),
   };
 }
 
@@ -137,7 +142,7 @@ export function setBorderCoupling(
 
 /**
  * Solves the ports after `setBorderCoupling` of every member of the rest:
- * Y_bb = b^T S^-1 b, Y_rb = -G S^-1 b, Y_rr = Y_rest + G S^-1 G^T, with G = k^T P y.
+ * Y = Y_rest + V S^-1 V^T, where V is -G = -k^T P y for the rest's ports and b for the border's own.
  * @throws RangeError when the border's Schur complement is singular
  */
 export function solveBorder(network: BorderedNetwork): void {
@@ -177,14 +182,13 @@ export function drivenCurrents(network: BorderedNetwork, port: number, re: Float
   const { factors, members, restPorts, schurRe, schurIm, linkRe, linkIm, borderRe, borderIm } = network;
   const m = members[members.length - 1]!.impedance.rows;
   const n = factors.order;
-  const own = members[members.length - 1]!.portCurrents;
   const fromRest = port < restPorts.length;
   for (let a = 0; a < m; a += 1) {
     let cr = 0;
     let ci = 0;
     for (let b = 0; b < m; b += 1) {
-      const vr = fromRest ? -linkRe[port * m + b]! : own![b]!;
-      const vi = fromRest ? -linkIm[port * m + b]! : 0;
+      const vr = linkRe[port * m + b]!;
+      const vi = linkIm[port * m + b]!;
       cr += schurRe[a * m + b]! * vr - schurIm[a * m + b]! * vi;
       ci += schurRe[a * m + b]! * vi + schurIm[a * m + b]! * vr;
     }
@@ -210,8 +214,10 @@ export function drivenCurrents(network: BorderedNetwork, port: number, re: Float
 function linkPorts(network: BorderedNetwork, m: number): void {
   const { factors, restPorts, portRe, portIm, scaledRe, scaledIm, linkRe, linkIm } = network;
   const n = factors.order;
+  const own = network.members[network.members.length - 1]!.portCurrents;
   linkRe.fill(0);
   linkIm.fill(0);
+  if (own !== null) linkRe.set(own, restPorts.length * m);
   for (let p = 0; p < restPorts.length; p += 1) {
     for (let i = factors.starts[restPorts[p]!]!; i < n; i += 1) {
       const kr = portRe[p * n + i]!;
@@ -219,36 +225,38 @@ function linkPorts(network: BorderedNetwork, m: number): void {
       for (let a = 0; a < m; a += 1) {
         const pr = scaledRe[i * m + a]!;
         const pi = scaledIm[i * m + a]!;
-        linkRe[p * m + a]! += kr * pr - ki * pi;
-        linkIm[p * m + a]! += kr * pi + ki * pr;
+        linkRe[p * m + a]! -= kr * pr - ki * pi;
+        linkIm[p * m + a]! -= kr * pi + ki * pr;
       }
     }
   }
 }
 
-/** Row p of V: -G for the rest's ports, b for the border's own; Y = Y_rest + V S^-1 V^T. */
+/** Y = Y_rest + V S^-1 V^T; row p of V is -G for the rest's ports, b for the border's own. */
 function closePorts(network: BorderedNetwork, m: number): void {
-  const { members, restPorts, restAdmittance, loadedAdmittance: y, schurRe, schurIm, linkRe, linkIm } = network;
-  const own = members[members.length - 1]!.portCurrents;
+  const { restPorts, restAdmittance, loadedAdmittance: y, schurRe, schurIm, linkRe, linkIm } = network;
+  const { rowRe, rowIm } = network;
   const rest = restPorts.length;
   const ports = y.rows;
   for (let p = 0; p < ports; p += 1) {
+    rowRe.fill(0);
+    rowIm.fill(0);
+    for (let b = 0; b < m; b += 1) {
+      const vr = linkRe[p * m + b]!;
+      const vi = linkIm[p * m + b]!;
+      for (let a = 0; a < m; a += 1) {
+        rowRe[a]! += schurRe[b * m + a]! * vr - schurIm[b * m + a]! * vi;
+        rowIm[a]! += schurRe[b * m + a]! * vi + schurIm[b * m + a]! * vr;
+      }
+    }
     for (let q = 0; q <= p; q += 1) {
       let re = p < rest ? restAdmittance.re[p * rest + q]! : 0;
       let im = p < rest ? restAdmittance.im[p * rest + q]! : 0;
       for (let a = 0; a < m; a += 1) {
-        const vr = p < rest ? -linkRe[p * m + a]! : own![a]!;
-        const vi = p < rest ? -linkIm[p * m + a]! : 0;
-        let tr = 0;
-        let ti = 0;
-        for (let b = 0; b < m; b += 1) {
-          const wr = q < rest ? -linkRe[q * m + b]! : own![b]!;
-          const wi = q < rest ? -linkIm[q * m + b]! : 0;
-          tr += schurRe[a * m + b]! * wr - schurIm[a * m + b]! * wi;
-          ti += schurRe[a * m + b]! * wi + schurIm[a * m + b]! * wr;
-        }
-        re += vr * tr - vi * ti;
-        im += vr * ti + vi * tr;
+        const wr = linkRe[q * m + a]!;
+        const wi = linkIm[q * m + a]!;
+        re += rowRe[a]! * wr - rowIm[a]! * wi;
+        im += rowRe[a]! * wi + rowIm[a]! * wr;
       }
       y.re[p * ports + q] = y.re[q * ports + p] = re;
       y.im[p * ports + q] = y.im[q * ports + p] = im;

@@ -1,12 +1,15 @@
 import { unknownCount, type WireMesh } from '../mesh';
 
 /** A field along the wire's active nodes, up to a factor; half at an end whose current goes on. */
-export type IncidentField = { readonly re: Float64Array; readonly im: Float64Array };
+export type IncidentField = { readonly re: Float64Array; readonly im: Float64Array; readonly weight: number };
 
 /** Distances of the neighbours that the family stands for, wavelengths: from the near field to plane waves. */
-const distancesInWavelengths = [0.08, 0.25, 1];
+const distancesInWavelengths = [2, 6, 20];
+const beside = 3;
+const broadside = 10;
+const slanted = 1;
 /** Elevations of the plane waves, as the share of k along the wire. */
-const planeWaveShares = [0, 0.35, 0.65, 0.9];
+const planeWaveShares = [0, 0.2];
 
 /**
  * The fields that neighbours can throw at a wire: spherical waves from nodes beside it (every neighbour's field
@@ -24,13 +27,13 @@ export function incidentFamily(k: number, mesh: WireMesh): IncidentField[] {
     const spacing = Math.min(length, distance);
     const count = Math.ceil(length / spacing) + 1;
     for (let i = 0; i < count; i += 1) {
-      family.push(sampled(mesh, grounded, (s) => sphericalWave(k, distance, s - (i * length) / (count - 1))));
+      family.push(sampled(mesh, grounded, (s) => sphericalWave(k, distance, s - (i * length) / (count - 1)), beside / Math.sqrt(count)));
     }
   }
   for (const share of planeWaveShares) {
     const signs = grounded || share === 0 ? [1] : [1, -1];
     for (const sign of signs) {
-      family.push(sampled(mesh, grounded, (s) => [Math.cos(sign * k * share * s), Math.sin(sign * k * share * s)]));
+      family.push(sampled(mesh, grounded, (s) => [Math.cos(sign * k * share * s), Math.sin(sign * k * share * s)], share === 0 ? broadside : slanted));
     }
   }
   return family;
@@ -42,7 +45,7 @@ function sphericalWave(k: number, distance: number, axial: number): [number, num
 }
 
 /** s counts from the plane on a wire that stands on it, from the wire's start otherwise. */
-function sampled(mesh: WireMesh, grounded: boolean, field: (s: number) => [number, number]): IncidentField {
+function sampled(mesh: WireMesh, grounded: boolean, field: (s: number) => [number, number], weight: number): IncidentField {
   const n = unknownCount(mesh);
   const { step, segments } = mesh.chain;
   const fromEnd = grounded && mesh.firstNode !== 0;
@@ -57,5 +60,5 @@ function sampled(mesh: WireMesh, grounded: boolean, field: (s: number) => [numbe
     re[i] = weight * (a + c);
     im[i] = weight * (b + d);
   }
-  return { re, im };
+  return { re, im, weight };
 }

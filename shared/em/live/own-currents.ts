@@ -5,7 +5,7 @@ import { waveNumber } from '../constants';
 import { selfBlock } from '../impedance-block';
 import { meshOfManyPieces, unknownCount, type WireMesh } from '../mesh';
 import type { Ground, Wire } from '../scene';
-import { incidentFamily } from './incident-family';
+import { incidentFamily, type IncidentField } from './incident-family';
 
 /**
  * The few real current functions by which one kind of wire answers at one frequency, whatever stands around
@@ -27,7 +27,7 @@ export type OwnCurrents = {
 };
 
 /** Functions below this share of the strongest are left out. */
-const keptShare = 0.01;
+const keptShare = 0.02;
 /** The driven current weighs more than any response: it carries the port, and most of the coupling. */
 const drivenWeight = 10;
 
@@ -49,7 +49,7 @@ export function findOwnCurrents(ground: Ground, frequency: number, wire: Wire): 
     }
   });
   const responses = complexLuSolve(complexLuFactorise(system), right);
-  const { count, vectors } = leadingBasis(stackedColumns(responses, driven), n, keptShare);
+  const { count, vectors } = leadingBasis(stackedColumns(responses, driven, family), n, keptShare);
   const functions = new Float64Array((mesh.chain.segments + 1) * count);
   functions.set(vectors, mesh.firstNode * count);
   return {
@@ -75,7 +75,7 @@ function activePart(block: ComplexMatrix, mesh: WireMesh): ComplexMatrix {
 }
 
 /** Real and imaginary parts of every response as columns; each response normalised, the driven one weighted. */
-function stackedColumns(responses: ComplexMatrix, driven: number): Float64Array[] {
+function stackedColumns(responses: ComplexMatrix, driven: number, family: readonly IncidentField[]): Float64Array[] {
   const { rows, columns } = responses;
   const stacked: Float64Array[] = [];
   for (let c = 0; c < columns; c += 1) {
@@ -88,7 +88,8 @@ function stackedColumns(responses: ComplexMatrix, driven: number): Float64Array[
       square += re[i]! ** 2 + im[i]! ** 2;
     }
     if (square === 0) continue;
-    const scale = (c < driven ? drivenWeight : 1) / Math.sqrt(square);
+    const weight = c < driven ? drivenWeight : family[c - driven]!.weight;
+    const scale = weight / Math.sqrt(square);
     stacked.push(
       re.map((value) => value * scale),
       im.map((value) => value * scale),

@@ -3,7 +3,7 @@ import { mutualBlock } from '../impedance-block';
 import type { WireMesh } from '../mesh';
 import type { Ground, Wire } from '../scene';
 import type { OwnCurrents } from './own-currents';
-import { coupleVertical, evaluateCoupling, type VerticalCoupling } from './vertical-coupling';
+import { coupleOnce, coupleVertical, evaluateCoupling, type VerticalCoupling } from './vertical-coupling';
 import { gridLevel, gridStep, sampleVertical, type VerticalSamples } from './vertical-samples';
 
 /** One wire as the couplings see it. */
@@ -20,8 +20,8 @@ export type CouplingSide = {
 export type PairCoupling = {
   re: Float64Array;
   im: Float64Array;
-  /** Coefficients by grid level; emptied when one of the kinds changes. */
-  readonly tables: Map<number, VerticalCoupling>;
+  /** Coefficients by grid level, null after the first time there; emptied when one of the kinds changes. */
+  readonly tables: Map<number, VerticalCoupling | null>;
 };
 
 /** Beyond so many grid points per wire the general quadrature is cheaper than the common grid. */
@@ -45,27 +45,34 @@ export function updatePairCoupling(
     const dy = second.wire.start[1] - first.wire.start[1];
     const distance = Math.sqrt(dx * dx + dy * dy);
     const lambda = (2 * Math.PI) / first.own.k;
-    const level = gridLevel(lambda, distance);
+    const level = distance > 0 ? gridLevel(lambda, distance, reachOf(ground, first.wire, second.wire)) : Infinity;
     if (Number.isFinite(level) && longest(first, second) <= mostGridPoints * gridStep(lambda, level)) {
-      evaluateCoupling(tableOf(ground, first, second, pair, level), distance, pair.re, pair.im);
+      coupleVerticals(ground, first, second, pair, level, distance);
       return;
     }
   }
   couplePlacedWires(ground, first, second, pair);
 }
 
-function tableOf(
+/** A pair that comes back to the same grid is under the finger: from then on its coefficients pay. */
+function coupleVerticals(
   ground: Ground,
   first: CouplingSide,
   second: CouplingSide,
   pair: PairCoupling,
   level: number,
-): VerticalCoupling {
-  const kept = pair.tables.get(level);
-  if (kept !== undefined) return kept;
-  const table = coupleVertical(first.own.k, ground, samplesOf(first, level), samplesOf(second, level));
-  pair.tables.set(level, table);
-  return table;
+  distance: number,
+): void {
+  const { k } = first.own;
+  const table = pair.tables.get(level);
+  if (table === undefined) {
+    pair.tables.set(level, null);
+    coupleOnce(k, ground, samplesOf(first, level), samplesOf(second, level), distance, pair.re, pair.im);
+    return;
+  }
+  const kept = table ?? coupleVertical(k, ground, samplesOf(first, level), samplesOf(second, level));
+  pair.tables.set(level, kept);
+  evaluateCoupling(kept, distance, pair.re, pair.im);
 }
 
 function samplesOf(side: CouplingSide, level: number): VerticalSamples {
@@ -74,6 +81,14 @@ function samplesOf(side: CouplingSide, level: number): VerticalSamples {
   const samples = sampleVertical(side.own, side.wire.start[2], side.sense === -1 ? -1 : 1, level);
   side.samples.set(level, samples);
   return samples;
+}
+
+/** The greatest height difference, or with the plane height sum, between points of two vertical wires, metres. */
+function reachOf(ground: Ground, a: Wire, b: Wire): number {
+  const topA = Math.max(a.start[2], a.end[2]);
+  const topB = Math.max(b.start[2], b.end[2]);
+  if (ground === 'plane') return topA + topB;
+  return Math.max(topA - Math.min(b.start[2], b.end[2]), topB - Math.min(a.start[2], a.end[2]));
 }
 
 function longest(first: CouplingSide, second: CouplingSide): number {

@@ -67,6 +67,77 @@ export function evaluateCoupling(
   }
 }
 
+/**
+ * The same impedances without gathering coefficients first: cheaper for a pair that does not go on moving.
+ * The receiver sums over its points once for all functions of the source.
+ */
+export function coupleOnce(
+  k: number,
+  ground: Ground,
+  source: VerticalSamples,
+  receiver: VerticalSamples,
+  distance: number,
+  re: Float64Array,
+  im: Float64Array,
+): void {
+  re.fill(0);
+  im.fill(0);
+  const lowest = receiver.first - source.first - source.points + 1;
+  const differences = kernelAt(k, distance, source.step, lowest, source.points + receiver.points - 1);
+  const sums =
+    ground === 'plane'
+      ? kernelAt(k, distance, source.step, receiver.first + source.first, source.points + receiver.points - 1)
+      : null;
+  const n = receiver.count;
+  const totalRe = new Float64Array(n);
+  const totalIm = new Float64Array(n);
+  for (let a = 0; a < source.points; a += 1) {
+    totalRe.fill(0);
+    totalIm.fill(0);
+    for (let b = 0; b < receiver.points; b += 1) {
+      const difference = b - a + source.points - 1;
+      let gr = differences.re[difference]!;
+      let gi = differences.im[difference]!;
+      if (sums !== null) {
+        gr += sums.re[a + b]!;
+        gi += sums.im[a + b]!;
+      }
+      for (let q = 0; q < n; q += 1) {
+        const current = receiver.receivers[b * n + q]!;
+        totalRe[q]! += current * gr;
+        totalIm[q]! += current * gi;
+      }
+    }
+    for (let m = 0; m < source.count; m += 1) {
+      const weight = source.sources[a * source.count + m]!;
+      for (let q = 0; q < n; q += 1) {
+        re[m * n + q]! += weight * totalRe[q]!;
+        im[m * n + q]! += weight * totalIm[q]!;
+      }
+    }
+  }
+}
+
+/** j (eta / 4 pi) e^{-jkR} / R at the heights first, first + 1 ... of the grid. */
+function kernelAt(
+  k: number,
+  distance: number,
+  step: number,
+  first: number,
+  count: number,
+): { re: Float64Array; im: Float64Array } {
+  const re = new Float64Array(count);
+  const im = new Float64Array(count);
+  const scale = freeSpaceImpedance / (4 * Math.PI);
+  for (let q = 0; q < count; q += 1) {
+    const height = (first + q) * step;
+    const r = Math.sqrt(distance * distance + height * height);
+    re[q] = (scale / r) * Math.sin(k * r);
+    im[q] = (scale / r) * Math.cos(k * r);
+  }
+  return { re, im };
+}
+
 function addProducts(
   source: VerticalSamples,
   a: number,

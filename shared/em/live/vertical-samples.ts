@@ -21,23 +21,34 @@ export type VerticalSamples = {
   readonly receivers: Float64Array;
 };
 
-/** Points of an interpolation; the kernel needs them within a distance that makes it smooth (`gridStep`). */
-const stencil = 8;
-/** Grid steps per wavelength and per distance that keep the interpolated kernel within 1e-4. */
-const stepsPerWavelength = 10;
-const stepsPerDistance = 4;
+/** Points of an interpolation. */
+const stencil = 6;
+/** Grid steps per wavelength of the kernel along the wire, and per distance, that keep it within 1e-3. */
+const stepsPerWavelength = 7;
+const stepsPerDistance = 2.5;
 
 const segmentRule = gaussLegendre(4);
 
-/** Level of the grid for a distance: the step is a tenth of a wavelength halved `level` times. */
-export function gridLevel(wavelength: number, distance: number): number {
-  const coarsest = wavelength / stepsPerWavelength;
-  return Math.max(0, Math.ceil(Math.log2((coarsest * stepsPerDistance) / distance)));
+/**
+ * Level of the grid for two wires at a distance whose heights differ (or add up) by at most `reach` metres: the
+ * step is a wavelength halved `level` times. Along the wire the kernel's phase runs at most with k reach / R:
+ * far wires see each other broadside and need few points.
+ */
+export function gridLevel(wavelength: number, distance: number, reach: number): number {
+  let level = Math.ceil(Math.log2((wavelength * stepsPerDistance) / distance));
+  // A coarse grid's stencils reach beyond the wires themselves, where the phase runs faster.
+  while (!isFineEnough(wavelength, distance, reach, gridStep(wavelength, level))) level += 1;
+  return level;
+}
+
+function isFineEnough(wavelength: number, distance: number, reach: number, step: number): boolean {
+  const height = reach + (stencil / 2) * step;
+  return step * stepsPerWavelength * height <= wavelength * Math.hypot(distance, height);
 }
 
 /** The grid's step at a level, metres. */
 export function gridStep(wavelength: number, level: number): number {
-  return wavelength / stepsPerWavelength / 2 ** level;
+  return wavelength / 2 ** level;
 }
 
 /**
