@@ -12,6 +12,16 @@ export async function run(openFront?: StartOptions['openFront']): Promise<void> 
     abort.abort();
     if (server) stopping ??= server.stop().then(() => process.exit(0), fail);
   };
+  process.on('unhandledRejection', (reason) => {
+    if (server) server.log.error({ err: reason }, 'a promise was rejected and nobody looked');
+    else fail(reason);
+  });
+  // After an exception that nobody caught the state is unknown: end in order rather than go on.
+  process.on('uncaughtException', (error) => {
+    if (!server) fail(error);
+    server.log.fatal({ err: error }, 'an exception was not caught');
+    stopping ??= server.stop().then(() => fail(error), fail);
+  });
   process.on('SIGINT', stop);
   process.on('SIGTERM', stop);
   // A console that went away (a closed terminal or pipe) must not end the server.

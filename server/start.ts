@@ -47,6 +47,7 @@ export interface StartOptions {
 /** A server that is ready. */
 export interface RunningServer {
   readonly url: string;
+  readonly log: Logger;
   /** Ends everything in order: new work, commits, sockets, connections, the database. */
   stop(): Promise<void>;
 }
@@ -151,6 +152,7 @@ async function startSteps(
   await announce(services, url, catcher !== undefined, say);
   return {
     url,
+    log,
     stop: async () => {
       log.info('stopping');
       await undoAll(log);

@@ -53,8 +53,9 @@ export async function startPrivateDatabase(
   const dataFolder = join(folder, 'data');
   const found = findInstance(dataFolder);
   if (found) {
-    await waitUntilReady(found, folder, () => isDatabaseServer(found.pid));
-    return describeInstance(found, true);
+    const adopted = await waitUntilReady(found, folder, () => isDatabaseServer(found.pid));
+    if (adopted) return describeInstance(found, true);
+    // It was on its way out; by now the folder is free.
   }
   mkdirSync(folder, { recursive: true, mode: 0o700 });
   if (!existsSync(dataFolder)) await install(folder, dataFolder);
@@ -138,29 +139,27 @@ async function launch(
   const pid = child.pid;
   if (pid === undefined) return failed;
   const instance = { pid, port, socket };
-  await Promise.race([
-    waitUntilReady(instance, folder, () => child.exitCode === null && child.signalCode === null),
-    failed,
-  ]);
-  return instance;
+  const alive = () => child.exitCode === null && child.signalCode === null;
+  if (await Promise.race([waitUntilReady(instance, folder, alive), failed])) return instance;
+  throw new StartProblem(
+    `MariaDB did not start on ${folder}: ${lastError(logPath)} (the whole story is in ${logPath})`,
+  );
 }
 
-async function waitUntilReady(instance: Instance, folder: string, isAlive: () => boolean): Promise<void> {
+/** Whether it answers; false when it ended instead. */
+async function waitUntilReady(instance: Instance, folder: string, isAlive: () => boolean): Promise<boolean> {
   const end = Date.now() + READY_WITHIN_MS;
   while (Date.now() < end) {
     if (!isAlive()) {
       rmSync(dirname(instance.socket), { recursive: true, force: true });
-      const log = join(folder, 'mariadb.log');
-      throw new StartProblem(
-        `MariaDB did not start on ${folder}: ${lastError(log)} (the whole story is in ${log})`,
-      );
+      return false;
     }
     const answer = await runTool('mariadb-admin', [
       ...addressInstance(instance.socket),
       '--connect-timeout=2',
       'ping',
     ]);
-    if (answer.code === 0) return;
+    if (answer.code === 0) return true;
     await delay(POLL_MS);
   }
   throw new StartProblem(`MariaDB on ${folder} does not answer; see ${join(folder, 'mariadb.log')}`);
