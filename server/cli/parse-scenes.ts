@@ -20,14 +20,22 @@ export function parseScenes(text: string): ParsedScenes {
     const parsed = solveSceneSchema.safeParse(input);
     if (parsed.success) {
       scenes.push(parsed.data);
-      problems.push(...sceneProblems(parsed.data).map((p) => ({ ...p, path: `${pathOf(prefix)}${many ? '.' : ''}${p.path}` })));
+      problems.push(
+        ...sceneProblems(parsed.data).map((p) => ({
+          ...p,
+          path: `${pathOf(prefix)}${many ? '.' : ''}${p.path}`,
+        })),
+      );
       return;
     }
     for (const issue of parsed.error.issues) {
       const keys = issue.code === 'unrecognized_keys' ? issue.keys : [null];
       for (const key of keys) {
         const path = [...prefix, ...issue.path, ...(key === null ? [] : [key])];
-        problems.push({ path: pathOf(path) || 'input', message: key === null ? issue.message : 'unknown key' });
+        problems.push({
+          path: pathOf(path) || 'input',
+          message: key === null ? issue.message : 'unknown key',
+        });
       }
     }
   });
@@ -35,7 +43,8 @@ export function parseScenes(text: string): ParsedScenes {
 }
 
 function parseJson(text: string): { ok: true; value: unknown } | { ok: false; message: string } {
-  if (text.trim() === '') return { ok: false, message: 'is empty: a scene as JSON is expected on standard input' };
+  if (text.trim() === '')
+    return { ok: false, message: 'is empty: a scene as JSON is expected on standard input' };
   try {
     return { ok: true, value: JSON.parse(text) };
   } catch (error) {

@@ -27,7 +27,9 @@ async function readInput(): Promise<string> {
   const chunks: Buffer[] = [];
   for await (const chunk of process.stdin) chunks.push(Buffer.from(chunk));
   // A byte order mark is no part of JSON, but editors leave it there.
-  return Buffer.concat(chunks).toString('utf8').replace(/^\uFEFF/, '');
+  return Buffer.concat(chunks)
+    .toString('utf8')
+    .replace(/^\uFEFF/, '');
 }
 
 function fail(lines: readonly string[]): number {

@@ -25,7 +25,11 @@ export type SolvedCurrents = {
 };
 
 /** Fills and solves the system of the meshed wires at a frequency in hertz. */
-export function solveCurrents(ground: Ground, frequency: number, meshes: readonly WireMesh[]): SolvedCurrents {
+export function solveCurrents(
+  ground: Ground,
+  frequency: number,
+  meshes: readonly WireMesh[],
+): SolvedCurrents {
   const k = waveNumber(frequency);
   const starts = startsOf(meshes);
   const system = impedanceMatrix(k, ground, meshes, starts);
@@ -48,7 +52,10 @@ export function solveCurrents(ground: Ground, frequency: number, meshes: readonl
       loadedAdmittance.im[p * ports.length + q] = amplitude * solution.im[unknown * ports.length + q]!;
     }
   });
-  return { loadedAdmittance, currents: (port) => meshes.map((mesh, m) => column(mesh, starts[m]!, solution, port)) };
+  return {
+    loadedAdmittance,
+    currents: (port) => meshes.map((mesh, m) => column(mesh, starts[m]!, solution, port)),
+  };
 }
 
 /** Z' of all unknowns: node blocks of every pair of wires, without the ends that carry no current. */
@@ -104,7 +111,11 @@ function copyBlock(
 
 function column(mesh: WireMesh, start: number, solution: ComplexMatrix, port: number): ChainCurrent {
   const nodes = mesh.chain.segments + 1;
-  const current: ChainCurrent = { chain: mesh.chain, re: new Float64Array(nodes), im: new Float64Array(nodes) };
+  const current: ChainCurrent = {
+    chain: mesh.chain,
+    re: new Float64Array(nodes),
+    im: new Float64Array(nodes),
+  };
   for (let i = mesh.firstNode; i <= mesh.lastNode; i += 1) {
     const at = (start + i - mesh.firstNode) * solution.columns + port;
     current.re[i] = solution.re[at]!;

@@ -56,7 +56,8 @@ export function unknownCount(mesh: WireMesh): number {
 /** Even, so that a centre feed finds its node. */
 function segmentCount(wire: Wire, frequency: number, refinement: number): number {
   const length = wireLength(wire);
-  const wanted = Math.max(leastSegments, (segmentsPerWavelength * length) / wavelength(frequency)) * refinement;
+  const wanted =
+    Math.max(leastSegments, (segmentsPerWavelength * length) / wavelength(frequency)) * refinement;
   const most = length / (leastSegmentInRadii * wire.radius);
   return 2 * Math.max(1, Math.ceil(Math.min(wanted, most) / 2));
 }

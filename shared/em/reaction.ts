@@ -69,8 +69,7 @@ export function nodeReactions(
   const [ux, uy, uz] = source.direction;
   const [tx, ty, tz] = test.direction;
   const gamma = ux * tx + uy * ty + uz * tz;
-  const crossSquared =
-    (uy * tz - uz * ty) ** 2 + (uz * tx - ux * tz) ** 2 + (ux * ty - uy * tx) ** 2;
+  const crossSquared = (uy * tz - uz * ty) ** 2 + (uz * tx - ux * tz) ** 2 + (ux * ty - uy * tx) ** 2;
   // Directions known to 1e-8 rad: within that, filaments are parallel and have no radial part.
   const parallel = crossSquared < 1e-16;
   const d = test.step;
@@ -246,7 +245,13 @@ function distanceToSingularity(line: SourceLine, s: number): number {
   return Math.sqrt(rx * rx + ry * ry + rz * rz + line.offset * line.offset + axial * axial);
 }
 
-function addPoints(line: SourceLine, s0: number, length: number, rule: QuadratureRule, out: NodeReactions): void {
+function addPoints(
+  line: SourceLine,
+  s0: number,
+  length: number,
+  rule: QuadratureRule,
+  out: NodeReactions,
+): void {
   const { k, source, test, gamma, parallel } = line;
   const { risingRe, risingIm, fallingRe, fallingIm } = out;
   const [ux, uy, uz] = source.direction;

@@ -12,7 +12,8 @@ export function sceneProblems(scene: Scene): SceneProblem[] {
   if (scene.wires.length === 0) add('wires', 'is empty');
   if (scene.frequencies.length === 0) add('frequencies', 'is empty');
   scene.frequencies.forEach((frequency, i) => {
-    if (!(frequency > 0 && Number.isFinite(frequency))) add(`frequencies[${i}]`, 'must be a positive number of hertz');
+    if (!(frequency > 0 && Number.isFinite(frequency)))
+      add(`frequencies[${i}]`, 'must be a positive number of hertz');
   });
   const seen = new Map<string, number>();
   scene.wires.forEach((wire, i) => {
@@ -32,12 +33,19 @@ export function sceneProblems(scene: Scene): SceneProblem[] {
   return problems;
 }
 
-function addWireProblems(scene: Scene, wire: Wire, path: string, add: (path: string, message: string) => void): void {
-  if (!(wire.radius > 0 && Number.isFinite(wire.radius))) add(`${path}.radius`, 'must be a positive number of metres');
+function addWireProblems(
+  scene: Scene,
+  wire: Wire,
+  path: string,
+  add: (path: string, message: string) => void,
+): void {
+  if (!(wire.radius > 0 && Number.isFinite(wire.radius)))
+    add(`${path}.radius`, 'must be a positive number of metres');
   if (!(wireLength(wire) > 0)) add(path, 'has no length');
   if (wire.load !== undefined) {
     if (wire.feed === 'none') add(`${path}.load`, 'closes a port that this wire does not have');
-    if (!(wire.load.re > 0)) add(`${path}.load.re`, 'must be positive: a reference without resistance has no power waves');
+    if (!(wire.load.re > 0))
+      add(`${path}.load.re`, 'must be positive: a reference without resistance has no power waves');
   }
   if (scene.ground === 'none') {
     if (wire.feed === 'start') add(`${path}.feed`, 'start needs ground "plane", on which the start stands');
@@ -48,9 +56,11 @@ function addWireProblems(scene: Scene, wire: Wire, path: string, add: (path: str
   if (wire.start[2] < 0 && !starts) add(`${path}.start[2]`, 'lies below the plane');
   if (wire.end[2] < 0 && !ends) add(`${path}.end[2]`, 'lies below the plane');
   if (starts && ends) add(path, 'lies in the plane');
-  else if (wire.feed === 'start' && !starts) add(`${path}.start[2]`, 'must be 0: a wire fed at its start stands on the plane');
+  else if (wire.feed === 'start' && !starts)
+    add(`${path}.start[2]`, 'must be 0: a wire fed at its start stands on the plane');
   else if (wire.feed === 'start' && ends) add(`${path}.end[2]`, 'touches the plane');
-  else if (wire.feed === 'centre' && (starts || ends)) add(path, 'is fed at its centre and touches the plane');
+  else if (wire.feed === 'centre' && (starts || ends))
+    add(path, 'is fed at its centre and touches the plane');
   else if (touchesPlane(wire, starts, ends)) add(path, 'touches the plane');
 }
 

@@ -30,7 +30,8 @@ import { validityOf } from './validity';
 export function solveScene(scene: Scene, method: Method): SceneAnswer {
   const problem = sceneProblems(scene)[0];
   if (problem !== undefined) throw new RangeError(`${problem.path} ${problem.message}`);
-  const results = method === 'live' ? solveLive(scene) : scene.frequencies.map((f) => solveDirectly(scene, method, f));
+  const results =
+    method === 'live' ? solveLive(scene) : scene.frequencies.map((f) => solveDirectly(scene, method, f));
   return { method, solverVersion, results };
 }
 
@@ -43,7 +44,9 @@ function solveLive(scene: Scene): FrequencyResult[] {
         if (wire.feed !== 'none') patterns[wire.id] = solver.pattern(f, wire.id, scene.pattern);
       }
     }
-    return networkResult(scene.wires, frequency, solver.loadedAdmittance(f), patterns, [...solver.validity(f)]);
+    return networkResult(scene.wires, frequency, solver.loadedAdmittance(f), patterns, [
+      ...solver.validity(f),
+    ]);
   });
 }
 

@@ -18,7 +18,8 @@ export function wireValidity(
   segmentLength: number,
 ): ValidityEntry[] {
   const entries: ValidityEntry[] = [];
-  const add = (code: ValidityEntry['code'], message: string) => entries.push({ wires: [wire.id], code, message });
+  const add = (code: ValidityEntry['code'], message: string) =>
+    entries.push({ wires: [wire.id], code, message });
   const length = wireLength(wire);
   const lambda = wavelength(frequency);
   if (wire.radius > greatestRadiusInWavelengths * lambda) {
@@ -33,7 +34,10 @@ export function wireValidity(
   if (method === 'emf') {
     const phase = (2 * segmentLength) / lambda;
     if (phase > greatestPhaseOfOnePiece) {
-      add('too-long-for-one-piece', `arm of ${round(segmentLength / lambda)} wavelength, one piece is held up to 0.4`);
+      add(
+        'too-long-for-one-piece',
+        `arm of ${round(segmentLength / lambda)} wavelength, one piece is held up to 0.4`,
+      );
     }
   }
   return entries;

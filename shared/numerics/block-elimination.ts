@@ -49,7 +49,10 @@ export function createBlockFactors(sizes: readonly number[]): BlockFactors {
  */
 export function blockFactorise(factors: BlockFactors): void {
   const { order: n, starts, lowerRe: re, lowerIm: im, pivotRe, pivotIm, pivotStarts } = factors;
-  const widest = Math.max(0, ...Array.from({ length: starts.length - 1 }, (_, b) => starts[b + 1]! - starts[b]!));
+  const widest = Math.max(
+    0,
+    ...Array.from({ length: starts.length - 1 }, (_, b) => starts[b + 1]! - starts[b]!),
+  );
   const scaledRe = new Float64Array(n * widest);
   const scaledIm = new Float64Array(n * widest);
   for (let b = 0; b < starts.length - 1; b += 1) {
@@ -106,51 +109,91 @@ export function blockFactorise(factors: BlockFactors): void {
 }
 
 /** y = L^-1 x for `columns` right sides, in place; x is row-major, order by columns. */
-export function blockForward(factors: BlockFactors, columns: number, xr: Float64Array, xi: Float64Array): void {
-  const { order: n, starts, lowerRe, lowerIm } = factors;
+export function blockForward(
+  factors: BlockFactors,
+  columns: number,
+  xr: Float64Array,
+  xi: Float64Array,
+): void {
+  const { starts } = factors;
   for (let b = 1; b < starts.length - 1; b += 1) {
     const width = starts[b]!;
     for (let j = width; j < starts[b + 1]!; j += 1) {
-      const row = j * n;
       let c = 0;
-      // Two right sides at a time: each entry of L is read once for both.
-      for (; c + 1 < columns; c += 2) {
-        let ar = 0;
-        let ai = 0;
-        let br = 0;
-        let bi = 0;
-        for (let i = 0, at = c; i < width; i += 1, at += columns) {
-          const lr = lowerRe[row + i]!;
-          const li = lowerIm[row + i]!;
-          const yr = xr[at]!;
-          const yi = xi[at]!;
-          const zr = xr[at + 1]!;
-          const zi = xi[at + 1]!;
-          ar += lr * yr - li * yi;
-          ai += lr * yi + li * yr;
-          br += lr * zr - li * zi;
-          bi += lr * zi + li * zr;
-        }
-        const at = j * columns + c;
-        xr[at]! -= ar;
-        xi[at]! -= ai;
-        xr[at + 1]! -= br;
-        xi[at + 1]! -= bi;
-      }
-      for (; c < columns; c += 1) {
-        let ar = 0;
-        let ai = 0;
-        for (let i = 0, at = c; i < width; i += 1, at += columns) {
-          const lr = lowerRe[row + i]!;
-          const li = lowerIm[row + i]!;
-          ar += lr * xr[at]! - li * xi[at]!;
-          ai += lr * xi[at]! + li * xr[at]!;
-        }
-        xr[j * columns + c]! -= ar;
-        xi[j * columns + c]! -= ai;
-      }
+      // Several right sides at a time: each entry of L is read once for all of them.
+      for (; c + 3 < columns; c += 4) forwardFour(factors, columns, width, j, c, xr, xi);
+      for (; c < columns; c += 1) forwardOne(factors, columns, width, j, c, xr, xi);
     }
   }
+}
+
+function forwardFour(
+  { order, lowerRe, lowerIm }: BlockFactors,
+  columns: number,
+  width: number,
+  j: number,
+  c: number,
+  xr: Float64Array,
+  xi: Float64Array,
+): void {
+  let r0 = 0;
+  let i0 = 0;
+  let r1 = 0;
+  let i1 = 0;
+  let r2 = 0;
+  let i2 = 0;
+  let r3 = 0;
+  let i3 = 0;
+  for (let i = 0, at = c, l = j * order; i < width; i += 1, l += 1, at += columns) {
+    const lr = lowerRe[l]!;
+    const li = lowerIm[l]!;
+    const a = xr[at]!;
+    const b = xi[at]!;
+    r0 += lr * a - li * b;
+    i0 += lr * b + li * a;
+    const e = xr[at + 1]!;
+    const f = xi[at + 1]!;
+    r1 += lr * e - li * f;
+    i1 += lr * f + li * e;
+    const g = xr[at + 2]!;
+    const h = xi[at + 2]!;
+    r2 += lr * g - li * h;
+    i2 += lr * h + li * g;
+    const p = xr[at + 3]!;
+    const q = xi[at + 3]!;
+    r3 += lr * p - li * q;
+    i3 += lr * q + li * p;
+  }
+  const to = j * columns + c;
+  xr[to]! -= r0;
+  xi[to]! -= i0;
+  xr[to + 1]! -= r1;
+  xi[to + 1]! -= i1;
+  xr[to + 2]! -= r2;
+  xi[to + 2]! -= i2;
+  xr[to + 3]! -= r3;
+  xi[to + 3]! -= i3;
+}
+
+function forwardOne(
+  { order, lowerRe, lowerIm }: BlockFactors,
+  columns: number,
+  width: number,
+  j: number,
+  c: number,
+  xr: Float64Array,
+  xi: Float64Array,
+): void {
+  let re = 0;
+  let im = 0;
+  for (let i = 0, at = c, l = j * order; i < width; i += 1, l += 1, at += columns) {
+    const lr = lowerRe[l]!;
+    const li = lowerIm[l]!;
+    re += lr * xr[at]! - li * xi[at]!;
+    im += lr * xi[at]! + li * xr[at]!;
+  }
+  xr[j * columns + c]! -= re;
+  xi[j * columns + c]! -= im;
 }
 
 /** x = L^-T y for one right side, in place. */

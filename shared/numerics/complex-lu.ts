@@ -79,7 +79,14 @@ function luInPlace(n: number, re: Float64Array, im: Float64Array, order: Int32Ar
   return true;
 }
 
-function swapRows(n: number, re: Float64Array, im: Float64Array, order: Int32Array, a: number, b: number): void {
+function swapRows(
+  n: number,
+  re: Float64Array,
+  im: Float64Array,
+  order: Int32Array,
+  a: number,
+  b: number,
+): void {
   for (let j = 0; j < n; j += 1) {
     const r = re[a * n + j]!;
     const i = im[a * n + j]!;

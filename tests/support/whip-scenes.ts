@@ -27,7 +27,12 @@ export function seededRandom(seed: number): () => number {
 }
 
 /** Whips of 0.03 to 1.2 m, upright on the plane, at least `spacing` metres apart on a roof of that size. */
-export function randomWhips(seed: number, count: number, roof: readonly [number, number], spacing = 0.15): Wire[] {
+export function randomWhips(
+  seed: number,
+  count: number,
+  roof: readonly [number, number],
+  spacing = 0.15,
+): Wire[] {
   const random = seededRandom(seed);
   const wires: Wire[] = [];
   while (wires.length < count) {
@@ -47,7 +52,13 @@ export function uprightWhip(id: string, start: Vector3, length: number, radius: 
 }
 
 /** A dipole by its centre and direction (unit vector). */
-export function dipole(id: string, centre: Vector3, length: number, direction: Vector3, radius: number): Wire {
+export function dipole(
+  id: string,
+  centre: Vector3,
+  length: number,
+  direction: Vector3,
+  radius: number,
+): Wire {
   const half = direction.map((u) => (u * length) / 2);
   return {
     id,

@@ -57,7 +57,9 @@ export function createBorderedNetwork(members: readonly NetworkMember[]): Border
   if (last === undefined) throw new RangeError('a network needs at least one wire');
   const factors = createBlockFactors(members.slice(0, -1).map((member) => member.impedance.rows));
   const m = last.impedance.rows;
-  const restPorts = members.flatMap((member, i) => (member.portCurrents !== null && i < members.length - 1 ? [i] : []));
+  const restPorts = members.flatMap((member, i) =>
+    member.portCurrents !== null && i < members.length - 1 ? [i] : [],
+  );
   const ports = restPorts.length + (last.portCurrents === null ? 0 : 1);
   const room = (size: number) => new Float64Array(size);
   return {
@@ -178,7 +180,12 @@ export function solveBorder(network: BorderedNetwork): void {
  * The functions' currents with one port driven by 1 V in series with its load, after `solveBorder`: first the
  * rest's, then the border's. `port` counts the rest's ports, then the border's own.
  */
-export function drivenCurrents(network: BorderedNetwork, port: number, re: Float64Array, im: Float64Array): void {
+export function drivenCurrents(
+  network: BorderedNetwork,
+  port: number,
+  re: Float64Array,
+  im: Float64Array,
+): void {
   const { factors, members, restPorts, schurRe, schurIm, linkRe, linkIm, borderRe, borderIm } = network;
   const m = members[members.length - 1]!.impedance.rows;
   const n = factors.order;
@@ -265,7 +272,13 @@ function closePorts(network: BorderedNetwork, m: number): void {
 }
 
 /** Z + g b b^T at `at` of a matrix with that many columns. */
-function putLoadedSelf(member: NetworkMember, re: Float64Array, im: Float64Array, at: number, columns: number): void {
+function putLoadedSelf(
+  member: NetworkMember,
+  re: Float64Array,
+  im: Float64Array,
+  at: number,
+  columns: number,
+): void {
   const { impedance, portCurrents: b, load } = member;
   const m = impedance.rows;
   for (let i = 0; i < m; i += 1) {

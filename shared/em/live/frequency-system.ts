@@ -9,7 +9,12 @@ import {
   type Coupling,
 } from './bordered-network';
 import { ownCurrentsOf, type OwnCurrentCache } from './own-current-cache';
-import { createPairCoupling, updatePairCoupling, type CouplingSide, type PairCoupling } from './pair-coupling';
+import {
+  createPairCoupling,
+  updatePairCoupling,
+  type CouplingSide,
+  type PairCoupling,
+} from './pair-coupling';
 import { verticalSense, type PlacedWire } from './placed-wire';
 
 /** One wire at one frequency, and which of the wire's states it was computed for. */
@@ -36,7 +41,11 @@ export type FrequencySystem = {
 };
 
 /** A system that knows no wire yet. */
-export function createFrequencySystem(ground: Ground, frequency: number, cache: OwnCurrentCache): FrequencySystem {
+export function createFrequencySystem(
+  ground: Ground,
+  frequency: number,
+  cache: OwnCurrentCache,
+): FrequencySystem {
   return { ground, frequency, cache, slots: [], pairs: [], network: null, order: [], portOf: [] };
 }
 

@@ -1,15 +1,20 @@
 import { unknownCount, type WireMesh } from '../mesh';
 
-/** A field along the wire's active nodes, up to a factor; half at an end whose current goes on. */
+/**
+ * A field along the wire's active nodes, up to a factor; half at an end whose current goes on. `weight` is how
+ * much its response counts among the others, all brought to the same norm.
+ */
 export type IncidentField = { readonly re: Float64Array; readonly im: Float64Array; readonly weight: number };
 
-/** Distances of the neighbours that the family stands for, wavelengths: from the near field to plane waves. */
+/** Distances of the sources beside the wire, wavelengths: most neighbours stand in the far field. */
 const distancesInWavelengths = [2, 6, 20];
-const beside = 3;
-const broadside = 10;
-const slanted = 1;
-/** Elevations of the plane waves, as the share of k along the wire. */
+/** Plane waves by the share of k along the wire: broadside, as from afar on the same roof, and slanted. */
 const planeWaveShares = [0, 0.2];
+
+/** Weights found on random mixed-band layouts: a far neighbour's wave matters most, weak pairs hang on it. */
+const besideWeight = 3;
+const broadsideWeight = 10;
+const slantedWeight = 1;
 
 /**
  * The fields that neighbours can throw at a wire: spherical waves from nodes beside it (every neighbour's field
@@ -26,14 +31,24 @@ export function incidentFamily(k: number, mesh: WireMesh): IncidentField[] {
     const distance = (2 * Math.PI * share) / k;
     const spacing = Math.min(length, distance);
     const count = Math.ceil(length / spacing) + 1;
+    const weight = besideWeight / Math.sqrt(count);
     for (let i = 0; i < count; i += 1) {
-      family.push(sampled(mesh, grounded, (s) => sphericalWave(k, distance, s - (i * length) / (count - 1)), beside / Math.sqrt(count)));
+      family.push(
+        sampled(mesh, grounded, (s) => sphericalWave(k, distance, s - (i * length) / (count - 1)), weight),
+      );
     }
   }
   for (const share of planeWaveShares) {
     const signs = grounded || share === 0 ? [1] : [1, -1];
     for (const sign of signs) {
-      family.push(sampled(mesh, grounded, (s) => [Math.cos(sign * k * share * s), Math.sin(sign * k * share * s)], share === 0 ? broadside : slanted));
+      family.push(
+        sampled(
+          mesh,
+          grounded,
+          (s) => [Math.cos(sign * k * share * s), Math.sin(sign * k * share * s)],
+          share === 0 ? broadsideWeight : slantedWeight,
+        ),
+      );
     }
   }
   return family;
@@ -45,7 +60,12 @@ function sphericalWave(k: number, distance: number, axial: number): [number, num
 }
 
 /** s counts from the plane on a wire that stands on it, from the wire's start otherwise. */
-function sampled(mesh: WireMesh, grounded: boolean, field: (s: number) => [number, number], weight: number): IncidentField {
+function sampled(
+  mesh: WireMesh,
+  grounded: boolean,
+  field: (s: number) => [number, number],
+  weight: number,
+): IncidentField {
   const n = unknownCount(mesh);
   const { step, segments } = mesh.chain;
   const fromEnd = grounded && mesh.firstNode !== 0;

@@ -38,7 +38,8 @@ export function livePattern(
   request: PatternRequest,
 ): Pattern {
   const port = system.portOf[driven]!;
-  if (port < 0 || system.network === null) throw new RangeError('a wire without a port has no pattern of its own');
+  if (port < 0 || system.network === null)
+    throw new RangeError('a wire without a port has no pattern of its own');
   const own = radiationOf(system, cache, system.slots[driven]!, request);
   const size = system.slots.reduce((sum, slot) => sum + slot.own.count, 0);
   const re = new Float64Array(size);
@@ -60,7 +61,10 @@ export function livePattern(
 }
 
 /** Port current per volt, siemens, and the functions' currents of a wire alone, its port closed by `load`. */
-export function solveAlone(slot: Slot, load: Complex): { admittance: Complex; re: Float64Array; im: Float64Array } {
+export function solveAlone(
+  slot: Slot,
+  load: Complex,
+): { admittance: Complex; re: Float64Array; im: Float64Array } {
   const { count, impedance, portCurrents } = slot.own;
   if (portCurrents === null) throw new RangeError(`wire ${slot.wire.id} has no port`);
   const z: ComplexMatrix = { ...impedance, re: impedance.re.slice(), im: impedance.im.slice() };
@@ -77,7 +81,12 @@ export function solveAlone(slot: Slot, load: Complex): { admittance: Complex; re
   return { admittance: { re: sum(re), im: sum(im) }, re, im };
 }
 
-function radiationOf(system: FrequencySystem, cache: RadiationCache, slot: Slot, request: PatternRequest): Radiation {
+function radiationOf(
+  system: FrequencySystem,
+  cache: RadiationCache,
+  slot: Slot,
+  request: PatternRequest,
+): Radiation {
   const key = `${request.elevationDeg} ${request.stepDeg}`;
   let cuts = cache.get(slot);
   if (cuts === undefined) cache.set(slot, (cuts = new Map<string, Radiation>()));
@@ -194,7 +203,8 @@ function aloneGains(slot: Slot, radiation: Radiation): number[] {
 
 function gains(k: number, total: Float64Array, power: number): number[] {
   return Array.from({ length: total.length / 4 }, (_, b) => {
-    const across = total[4 * b]! ** 2 + total[4 * b + 1]! ** 2 + total[4 * b + 2]! ** 2 + total[4 * b + 3]! ** 2;
+    const across =
+      total[4 * b]! ** 2 + total[4 * b + 1]! ** 2 + total[4 * b + 2]! ** 2 + total[4 * b + 3]! ** 2;
     return gainDbi(intensityOf(k, across), power);
   });
 }

@@ -50,6 +50,9 @@ class OwnCurrentSolver implements LiveSolver {
   private readonly ground: Ground;
   private readonly systems: FrequencySystem[];
   private readonly radiation: RadiationCache[];
+  /** Counts the updates, and which of them each system has followed. */
+  private revision = 0;
+  private readonly followed: Int32Array;
   private placed: PlacedWire[] = [];
   private readonly indexOf = new Map<string, number>();
 
@@ -58,6 +61,7 @@ class OwnCurrentSolver implements LiveSolver {
     this.frequencies = frequencies;
     this.systems = frequencies.map((frequency) => createFrequencySystem(ground, frequency, cache));
     this.radiation = frequencies.map(() => new Map());
+    this.followed = new Int32Array(frequencies.length).fill(-1);
     this.update(wires);
   }
 
@@ -66,6 +70,7 @@ class OwnCurrentSolver implements LiveSolver {
       wires.length === this.placed.length && wires.every((wire, i) => wire.id === this.placed[i]!.wire.id);
     if (!sameIds) this.takeIds(wires);
     wires.forEach((wire, i) => changePlaced(this.placed[i]!, wire, this.ground));
+    this.revision += 1;
   }
 
   isolationDb(frequencyIndex: number, into: string, from: string): number {
@@ -148,7 +153,10 @@ class OwnCurrentSolver implements LiveSolver {
   private systemAt(frequencyIndex: number): FrequencySystem {
     const system = this.systems[frequencyIndex];
     if (system === undefined) throw new RangeError(`no frequency of index ${frequencyIndex}`);
-    bringUpToDate(system, this.placed);
+    if (this.followed[frequencyIndex] !== this.revision) {
+      bringUpToDate(system, this.placed);
+      this.followed[frequencyIndex] = this.revision;
+    }
     return system;
   }
 

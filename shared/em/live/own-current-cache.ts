@@ -11,7 +11,12 @@ export function createOwnCurrentCache(limit = 20_000): OwnCurrentCache {
 }
 
 /** The functions of a wire's kind at a frequency in hertz, found now unless the cache holds them. */
-export function ownCurrentsOf(cache: OwnCurrentCache, ground: Ground, frequency: number, wire: Wire): OwnCurrents {
+export function ownCurrentsOf(
+  cache: OwnCurrentCache,
+  ground: Ground,
+  frequency: number,
+  wire: Wire,
+): OwnCurrents {
   const key = kindKey(wire, ground, frequency);
   const kept = cache.functions.get(key);
   if (kept !== undefined) return kept;

@@ -75,7 +75,11 @@ function activePart(block: ComplexMatrix, mesh: WireMesh): ComplexMatrix {
 }
 
 /** Real and imaginary parts of every response as columns; each response normalised, the driven one weighted. */
-function stackedColumns(responses: ComplexMatrix, driven: number, family: readonly IncidentField[]): Float64Array[] {
+function stackedColumns(
+  responses: ComplexMatrix,
+  driven: number,
+  family: readonly IncidentField[],
+): Float64Array[] {
   const { rows, columns } = responses;
   const stacked: Float64Array[] = [];
   for (let c = 0; c < columns; c += 1) {
@@ -128,7 +132,12 @@ function reduced(z: ComplexMatrix, vectors: Float64Array, count: number): Comple
   return result;
 }
 
-function portCurrentsOf(mesh: WireMesh, k: number, functions: Float64Array, count: number): Float64Array | null {
+function portCurrentsOf(
+  mesh: WireMesh,
+  k: number,
+  functions: Float64Array,
+  count: number,
+): Float64Array | null {
   if (mesh.portNode === null) return null;
   const peak = Math.sin(k * mesh.chain.step);
   return Float64Array.from({ length: count }, (_, m) => peak * functions[mesh.portNode! * count + m]!);

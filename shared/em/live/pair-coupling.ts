@@ -45,7 +45,8 @@ export function updatePairCoupling(
     const dy = second.wire.start[1] - first.wire.start[1];
     const distance = Math.sqrt(dx * dx + dy * dy);
     const lambda = (2 * Math.PI) / first.own.k;
-    const level = distance > 0 ? gridLevel(lambda, distance, reachOf(ground, first.wire, second.wire)) : Infinity;
+    const level =
+      distance > 0 ? gridLevel(lambda, distance, reachOf(ground, first.wire, second.wire)) : Infinity;
     if (Number.isFinite(level) && longest(first, second) <= mostGridPoints * gridStep(lambda, level)) {
       coupleVerticals(ground, first, second, pair, level, distance);
       return;
@@ -98,7 +99,12 @@ function longest(first: CouplingSide, second: CouplingSide): number {
 }
 
 /** Wires in any direction: the kernel between all nodes, then reduced to the functions. */
-function couplePlacedWires(ground: Ground, first: CouplingSide, second: CouplingSide, pair: PairCoupling): void {
+function couplePlacedWires(
+  ground: Ground,
+  first: CouplingSide,
+  second: CouplingSide,
+  pair: PairCoupling,
+): void {
   const block = mutualBlock(first.own.k, ground, placedMesh(first), placedMesh(second));
   const { count: m, functions: phi } = first.own;
   const { count: n, functions: psi } = second.own;

@@ -9,11 +9,15 @@ import type { VerticalSamples } from './vertical-samples';
  */
 export type VerticalCoupling = {
   readonly k: number;
-  /** Functions of the source wire by functions of the receiving wire, row-major within each q. */
+  /** Number of function pairs: those of the source wire by those of the receiving wire, row-major. */
   readonly size: number;
   /** u_q^2, square metres. */
   readonly heightsSquared: Float64Array;
+  /** Function pairs by heights, row-major. */
   readonly coefficients: Float64Array;
+  /** Room for the kernel at all heights. */
+  readonly kernelRe: Float64Array;
+  readonly kernelIm: Float64Array;
 };
 
 /** Gathers the coefficients C: what two wires' samples have in common at each height difference and sum. */
@@ -49,22 +53,46 @@ export function evaluateCoupling(
   re: Float64Array,
   im: Float64Array,
 ): void {
-  const { k, size, heightsSquared, coefficients } = coupling;
-  re.fill(0);
-  im.fill(0);
+  const { k, size, heightsSquared, coefficients, kernelRe, kernelIm } = coupling;
+  const heights = heightsSquared.length;
   const distanceSquared = distance * distance;
   const scale = freeSpaceImpedance / (4 * Math.PI);
-  for (let q = 0, at = 0; q < heightsSquared.length; q += 1) {
+  for (let q = 0; q < heights; q += 1) {
     const r = Math.sqrt(distanceSquared + heightsSquared[q]!);
-    const over = scale / r;
-    const gr = over * Math.sin(k * r);
-    const gi = over * Math.cos(k * r);
-    for (let e = 0; e < size; e += 1, at += 1) {
-      const c = coefficients[at]!;
-      re[e]! += c * gr;
-      im[e]! += c * gi;
-    }
+    kernelRe[q] = (scale / r) * Math.sin(k * r);
+    kernelIm[q] = (scale / r) * Math.cos(k * r);
   }
+  let e = 0;
+  // Two function pairs at a time: each value of the kernel is read once for both.
+  for (; e + 1 < size; e += 2) {
+    let ar = 0;
+    let ai = 0;
+    let br = 0;
+    let bi = 0;
+    for (let q = 0, a = e * heights, b = a + heights; q < heights; q += 1, a += 1, b += 1) {
+      const gr = kernelRe[q]!;
+      const gi = kernelIm[q]!;
+      const ca = coefficients[a]!;
+      const cb = coefficients[b]!;
+      ar += ca * gr;
+      ai += ca * gi;
+      br += cb * gr;
+      bi += cb * gi;
+    }
+    re[e] = ar;
+    im[e] = ai;
+    re[e + 1] = br;
+    im[e + 1] = bi;
+  }
+  if (e === size) return;
+  let ar = 0;
+  let ai = 0;
+  for (let q = 0, a = e * heights; q < heights; q += 1, a += 1) {
+    ar += coefficients[a]! * kernelRe[q]!;
+    ai += coefficients[a]! * kernelIm[q]!;
+  }
+  re[e] = ar;
+  im[e] = ai;
 }
 
 /**
@@ -156,13 +184,22 @@ function addProducts(
 }
 
 /** Leaves out the heights that never occur (between the differences and the sums of high-standing wires). */
-function compact(k: number, size: number, step: number, dense: Float64Array, heights: number): VerticalCoupling {
+function compact(
+  k: number,
+  size: number,
+  step: number,
+  dense: Float64Array,
+  heights: number,
+): VerticalCoupling {
   const used: number[] = [];
   for (let q = 0; q < heights; q += 1) {
     if (dense.subarray(q * size, (q + 1) * size).some((value) => value !== 0)) used.push(q);
   }
   const heightsSquared = Float64Array.from(used, (q) => (q * step) ** 2);
   const coefficients = new Float64Array(used.length * size);
-  used.forEach((q, i) => coefficients.set(dense.subarray(q * size, (q + 1) * size), i * size));
-  return { k, size, heightsSquared, coefficients };
+  for (let e = 0; e < size; e += 1) {
+    used.forEach((q, i) => (coefficients[e * used.length + i] = dense[q * size + e]!));
+  }
+  const room = () => new Float64Array(used.length);
+  return { k, size, heightsSquared, coefficients, kernelRe: room(), kernelIm: room() };
 }

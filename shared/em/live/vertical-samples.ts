@@ -22,9 +22,9 @@ export type VerticalSamples = {
 };
 
 /** Points of an interpolation. */
-const stencil = 6;
+const stencil = 8;
 /** Grid steps per wavelength of the kernel along the wire, and per distance, that keep it within 1e-3. */
-const stepsPerWavelength = 7;
+const stepsPerWavelength = 5.5;
 const stepsPerDistance = 2.5;
 
 const segmentRule = gaussLegendre(4);
