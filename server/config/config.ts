@@ -81,6 +81,9 @@ export function parseConfig(environment: Readonly<Record<string, string | undefi
       `HOST is ${settings.HOST}: other machines can reach this server; put TLS in front of it and set PUBLIC_URL.`,
     );
   }
+  if (settings.PUBLIC_URL?.startsWith('https:') && settings.TRUST_PROXY === undefined) {
+    warnings.push('PUBLIC_URL is https, but TRUST_PROXY is not set: session cookies are not marked Secure.');
+  }
   if (settings.DEMO === true && !demoAllowed) {
     warnings.push('DEMO is left off: it is only for the private database on a loopback address.');
   }

@@ -1,5 +1,13 @@
 import { randomBytes } from 'node:crypto';
-import { chmodSync, existsSync, mkdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
+import {
+  chmodSync,
+  existsSync,
+  mkdirSync,
+  readFileSync,
+  realpathSync,
+  statSync,
+  writeFileSync,
+} from 'node:fs';
 import { join } from 'node:path';
 
 /** The name of the file with the secret that signs session cookies. */
@@ -21,16 +29,18 @@ export interface DataFolder {
  * @throws Error when it is not a folder or cannot be written.
  */
 export function openDataFolder(root: string): DataFolder {
-  const folder = nameDataFolder(root);
   if (existsSync(root) && !statSync(root).isDirectory()) throw new Error(`${root} is not a folder`);
   mkdirSync(root, { recursive: true, mode: 0o700 });
+  const folder = nameDataFolder(root);
   for (const part of [folder.files, folder.logs, folder.dumps])
     mkdirSync(part, { recursive: true, mode: 0o700 });
   return folder;
 }
 
 /** The names of a data folder's parts, whether they exist or not. */
-export function nameDataFolder(root: string): DataFolder {
+export function nameDataFolder(given: string): DataFolder {
+  // One name for one folder, whatever links lead to it: a running database is found by it.
+  const root = existsSync(given) ? realpathSync(given) : given;
   return {
     root,
     database: join(root, 'database'),

@@ -61,14 +61,15 @@ export async function makeBackup(config: Config, path: string): Promise<void> {
  */
 export async function restoreBackup(config: Config, path: string): Promise<void> {
   const archive = resolve(path);
-  const folder = nameDataFolder(config.dataFolder);
   if (!existsSync(archive)) throw new StartProblem(`There is no file ${archive}.`);
-  if (existsSync(folder.root) && readdirSync(folder.root).length > 0) {
+  const { dataFolder } = config;
+  if (existsSync(dataFolder) && readdirSync(dataFolder).length > 0) {
     throw new StartProblem(
-      `${folder.root} is not empty: a backup is restored into an empty data folder only.`,
+      `${dataFolder} is not empty: a backup is restored into an empty data folder only.`,
     );
   }
-  mkdirSync(folder.root, { recursive: true, mode: 0o700 });
+  mkdirSync(dataFolder, { recursive: true, mode: 0o700 });
+  const folder = nameDataFolder(dataFolder);
   const lock = lockFolder(folder.root);
   try {
     await tar(['-xzf', archive, '--no-same-owner', '-C', folder.root, MANIFEST, DUMP, SECRET_FILE, FILES]);

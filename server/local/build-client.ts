@@ -112,7 +112,8 @@ function exportClient(outputFolder: string, logPath: string, signal: AbortSignal
           EXPO_OFFLINE: '1',
           TMPDIR: scratch,
         },
-        ...(signal ? { signal } : {}),
+        // The bundler takes its time over SIGTERM, and nothing of its half-made folder is used.
+        ...(signal ? { signal, killSignal: 'SIGKILL' as const } : {}),
       },
     );
     child.stdout.pipe(log, { end: false });

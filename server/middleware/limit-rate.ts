@@ -15,7 +15,7 @@ export interface RateLimits {
 
 /** The limits of a running server. */
 export const DEFAULT_RATE_LIMITS: RateLimits = {
-  requestsPerMinute: 1200,
+  requestsPerMinute: 6000,
   attemptsPerAccount: 10,
   attemptsPerAddress: 50,
 };

@@ -67,3 +67,8 @@ test('a proxy is trusted only as TRUST_PROXY says', () => {
   expect(parseConfig({ TRUST_PROXY: 'loopback' }).trustProxy).toBe('loopback');
   expect(parseConfig({ TRUST_PROXY: 'true' }).trustProxy).toBe(true);
 });
+
+test('an https address without a trusted proxy gives a warning about cookies', () => {
+  expect(parseConfig({ PUBLIC_URL: 'https://plan.example.com' }).warnings.join()).toContain('Secure');
+  expect(parseConfig({ PUBLIC_URL: 'https://plan.example.com', TRUST_PROXY: '1' }).warnings).toEqual([]);
+});
