@@ -12,7 +12,7 @@ import { refuseRequest } from './middleware/refusal-error';
 import { refuseWhileStopping } from './middleware/refuse-while-stopping';
 import { serveClient } from './middleware/serve-client';
 import { createHealthRouter } from './routes/health';
-import { listRouters } from './routes';
+import { listRouters } from './routes/list-routers';
 import type { Services } from './services';
 
 /** The application without a socket to listen on. */
