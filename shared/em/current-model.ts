@@ -1,7 +1,7 @@
 import { complexLuFactorise, complexLuSolve } from '../numerics/complex-lu';
 import { createComplexMatrix, type ComplexMatrix } from '../numerics/complex-matrix';
 import { waveNumber } from './constants';
-import { mutualBlock, selfBlock } from './impedance-block';
+import { mutualBlock, onePieceSelfBlock, selfBlock } from './impedance-block';
 import { unknownCount, type WireMesh } from './mesh';
 import { loadOf } from './network';
 import type { ChainCurrent } from './radiation';
@@ -70,7 +70,8 @@ export function impedanceMatrix(
   meshes.forEach((source, a) => {
     for (let b = a; b < meshes.length; b += 1) {
       const test = meshes[b]!;
-      const block = a === b ? selfBlock(k, ground, source) : mutualBlock(k, ground, source, test);
+      const self = source.isOnePiece ? onePieceSelfBlock : selfBlock;
+      const block = a === b ? self(k, ground, source) : mutualBlock(k, ground, source, test);
       copyBlock(block, source, test, starts[a]!, starts[b]!, z);
     }
   });

@@ -1,11 +1,34 @@
 import { createComplexMatrix, type ComplexMatrix } from '../numerics/complex-matrix';
 import { chainMirrored, segmentDistance } from './chain';
+import { freeSpaceImpedance } from './constants';
 import type { WireMesh } from './mesh';
 import { addChainBlock, addParallelBlock } from './reaction';
 import type { Ground } from './scene';
 
 /** Directions within 1e-8 rad of upright or horizontal count as such. */
 const straightWithin = 1e-16;
+
+/** The thin limit is taken at this share of the radius: what remains of it is below 1e-3 ohm. */
+const thinShare = 1e-4;
+
+/**
+ * Self impedance block of one assumed sinusoid as the textbooks have it: of the radius only its logarithm is kept,
+ * X(a) = X(a0) + (eta / 4 pi) 2 sin(2kh) ln(a / a0), half of that for an arm on the plane. A half-wave dipole has
+ * its 42.5 ohm at every radius then; the terms left out are of the order of k a.
+ * @source Balanis 2016, equations 8-60 and 8-61 (Ci(2ka^2/l) for small arguments)
+ */
+export function onePieceSelfBlock(k: number, ground: Ground, mesh: WireMesh): ComplexMatrix {
+  const { chain, wire } = mesh;
+  const [ux, uy] = chain.direction;
+  // A sloping whip meets its image at an angle; the closed form knows straight wires alone.
+  if (chain.segments === 1 && ux * ux + uy * uy >= straightWithin) return selfBlock(k, ground, mesh);
+  const thin = { ...mesh, wire: { ...wire, radius: thinShare * wire.radius } };
+  const block = selfBlock(k, ground, thin);
+  const at = mesh.firstNode * block.columns + mesh.firstNode;
+  const logarithm = chain.segments * Math.sin(2 * k * chain.step) * Math.log(1 / thinShare);
+  block.im[at]! += (freeSpaceImpedance / (4 * Math.PI)) * logarithm;
+  return block;
+}
 
 /**
  * Impedances between the node currents of one wire, its image included, all nodes by all nodes. The test

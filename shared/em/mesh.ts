@@ -14,6 +14,8 @@ export type WireMesh = {
   readonly lastNode: number;
   /** The node that carries the port, or null. */
   readonly portNode: number | null;
+  /** Whether the current is one assumed sinusoid and not solved. */
+  readonly isOnePiece: boolean;
 };
 
 /** Segments per wavelength of a solved current: the mesh adds less than 0.05 dB to an isolation. */
@@ -30,7 +32,7 @@ export function meshOfOnePiece(wire: Wire, ground: Ground): WireMesh {
   const node = starts ? 0 : 1;
   const port = wire.feed === 'none' ? null : node;
   const chain = chainOfWire(wire, starts || ends ? 1 : 2);
-  return { wire, chain, firstNode: node, lastNode: node, portNode: port };
+  return { wire, chain, firstNode: node, lastNode: node, portNode: port, isOnePiece: true };
 }
 
 /** As many pieces as the frequency (hertz) asks for. `refinement` multiplies their number. */
@@ -45,6 +47,7 @@ export function meshOfManyPieces(wire: Wire, ground: Ground, frequency: number, 
     firstNode: starts ? 0 : 1,
     lastNode: ends ? segments : segments - 1,
     portNode: port,
+    isOnePiece: false,
   };
 }
 
