@@ -49,7 +49,7 @@ export function createApp(services: Services, options: ApplicationOptions): Appl
     '/api',
     limitRequests(services.limits),
     forbidCaching,
-    guardOrigin(config.publicUrl),
+    guardOrigin(config),
     guardMediaType(),
     ...sessionHandlers,
     readJson(),

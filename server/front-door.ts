@@ -6,6 +6,7 @@ import {
   type ServerResponse,
 } from 'node:http';
 import type { AddressInfo } from 'node:net';
+import type { ProblemDocument } from '@/shared/api/problem';
 import type { Config } from './config/config';
 import type { Lifecycle } from './lifecycle';
 import { StartProblem } from './local/start-problem';
@@ -79,15 +80,20 @@ function explainListenError(error: NodeJS.ErrnoException, host: string, port: nu
 }
 
 function answerStarting(request: IncomingMessage, response: ServerResponse, status: string): void {
-  const path = request.url ?? '/';
-  const json = path.startsWith('/api/');
+  const path = (request.url ?? '/').split('?', 1)[0] ?? '/';
+  const answer =
+    path === '/api/health'
+      ? { type: 'application/json', body: JSON.stringify({ status }) }
+      : path.startsWith('/api/')
+        ? { type: 'application/problem+json', body: JSON.stringify(STARTING_PROBLEM) }
+        : { type: 'text/html; charset=utf-8', body: STARTING_PAGE };
   response.writeHead(503, {
-    'Content-Type': json ? 'application/json' : 'text/html; charset=utf-8',
+    'Content-Type': answer.type,
     'Cache-Control': 'no-store',
     'Retry-After': '2',
     Connection: 'close',
   });
-  response.end(json ? JSON.stringify({ status }) : STARTING_PAGE);
+  response.end(answer.body);
 }
 
 async function waitUntilEmpty(inHand: ReadonlySet<ServerResponse>): Promise<void> {
@@ -99,6 +105,14 @@ async function waitUntilEmpty(inHand: ReadonlySet<ServerResponse>): Promise<void
   await Promise.race([Promise.all(answered), late]);
   clearTimeout(timer);
 }
+
+const STARTING_PROBLEM: ProblemDocument = {
+  type: 'urn:elbowroom:problem:unavailable',
+  title: 'Service Unavailable',
+  status: 503,
+  detail: 'The server is starting. Try again in a little while.',
+  code: 'unavailable',
+};
 
 const STARTING_PAGE = `<!doctype html>
 <html lang="en">

@@ -25,7 +25,7 @@ export function createSocketServer(
     maxHttpBufferSize: MESSAGE_LIMIT_BYTES,
     // CORS settings do not guard websockets.
     allowRequest: (request, answer) => {
-      const allowed = isSameOrigin(request, services.config.publicUrl);
+      const allowed = isSameOrigin(request, services.config);
       answer(allowed ? null : 'foreign origin', allowed);
     },
   });

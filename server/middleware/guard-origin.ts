@@ -1,13 +1,17 @@
 import type { RequestHandler } from 'express';
 import type { IncomingMessage } from 'node:http';
+import type { Config } from '../config/config';
 import { refuseRequest } from './refusal-error';
+
+/** The settings that say where requests may come from. */
+export type OriginSettings = Pick<Config, 'publicUrl' | 'trustProxy'>;
 
 const SAFE_METHODS = new Set(['GET', 'HEAD', 'OPTIONS']);
 
 /** Refuses an unsafe request from another site's page, and one that says nothing of where it comes from. */
-export function guardOrigin(publicUrl: string | undefined): RequestHandler {
+export function guardOrigin(config: OriginSettings): RequestHandler {
   return (request, _response, next) => {
-    if (!SAFE_METHODS.has(request.method) && !isSameOrigin(request, publicUrl)) {
+    if (!SAFE_METHODS.has(request.method) && !isSameOrigin(request, config)) {
       refuseRequest('foreign-origin', 'This request does not come from a page of this server.');
     }
     next();
@@ -27,12 +31,14 @@ export function guardMediaType(): RequestHandler {
 }
 
 /**
- * Whether the Origin header names this server: PUBLIC_URL when it is set, otherwise the Host the request was
- * sent to. Serves requests as well as Socket.IO's handshake.
+ * Whether the Origin header names this server: by PUBLIC_URL, by the Host the request was sent to, or by the host
+ * that a trusted proxy was asked for. Serves requests as well as Socket.IO's handshake.
  */
-export function isSameOrigin(request: IncomingMessage, publicUrl: string | undefined): boolean {
-  const { origin, host } = request.headers;
+export function isSameOrigin(request: IncomingMessage, { publicUrl, trustProxy }: OriginSettings): boolean {
+  const { origin } = request.headers;
   if (origin === undefined || !URL.canParse(origin)) return false;
   if (publicUrl !== undefined && new URL(publicUrl).origin === origin) return true;
-  return host !== undefined && new URL(origin).host === host.toLowerCase();
+  const forwarded = trustProxy === false ? undefined : request.headers['x-forwarded-host'];
+  const host = (typeof forwarded === 'string' ? forwarded.split(',')[0] : undefined) ?? request.headers.host;
+  return host !== undefined && new URL(origin).host === host.trim().toLowerCase();
 }
