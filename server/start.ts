@@ -96,7 +96,9 @@ async function startSteps(
   log.info({ url }, 'starting');
   goOn();
 
-  const database = await openDatabase(config, folder, say);
+  const database = await openDatabase(config, folder, say, (error) => {
+    log.error({ err: error }, 'the database is away');
+  });
   undo.push(() => database.close());
   const { sequelize } = database;
   bindModels(sequelize);

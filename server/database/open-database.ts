@@ -5,6 +5,7 @@ import type { DataFolder } from '../config/data-folder';
 import { APPLICATION_USER, createPrivateDatabase, preparePrivateAccounts } from '../local/private-accounts';
 import { addressInstance, startPrivateDatabase } from '../local/private-database';
 import { StartProblem } from '../local/start-problem';
+import { watchDatabase } from '../local/watch-database';
 import { connect } from './connection';
 import { dumpDatabase, targetOfUrl, type ToolTarget } from './dump';
 import { grantApplication, verifyApplicationRights, type DatabaseAccount } from './grants';
@@ -37,6 +38,7 @@ export async function openDatabase(
   config: Config,
   folder: DataFolder,
   say: (line: string) => void,
+  report: (error: unknown) => void,
 ): Promise<OpenDatabase> {
   if (config.database.kind === 'external') {
     const access = await reachExternal(config.database.applicationUrl, config.database.ownerUrl);
@@ -58,9 +60,11 @@ export async function openDatabase(
       folder,
       say,
     );
+    const watch = watchDatabase(instance, report);
     return {
       sequelize,
       close: async () => {
+        await watch.stop();
         await sequelize.close();
         await instance.stop();
       },

@@ -38,6 +38,10 @@ export interface PrivateDatabase {
   readonly port: number;
   readonly socket: string;
   readonly adopted: boolean;
+  /** Whether the server still runs. */
+  isAlive(): boolean;
+  /** Starts the server again on the same port, after it ended by itself or was killed. */
+  revive(): Promise<void>;
   /** Ends the server and waits until it is gone. */
   stop(): Promise<void>;
 }
@@ -54,13 +58,14 @@ export async function startPrivateDatabase(
   const found = findInstance(dataFolder);
   if (found) {
     const adopted = await waitUntilReady(found, folder, () => isDatabaseServer(found.pid));
-    if (adopted) return describeInstance(found, true);
+    if (adopted) return describeInstance(found, true, folder, options);
     // It was on its way out; by now the folder is free.
   }
   mkdirSync(folder, { recursive: true, mode: 0o700 });
   if (!existsSync(dataFolder)) await install(folder, dataFolder);
   checkRoom(folder, ROOM_TO_START_BYTES);
-  return describeInstance(await launch(folder, dataFolder, options), false);
+  const place = { port: await findFreePort(), socket: makeSocketPath() };
+  return describeInstance(await launch(folder, options, place), false, folder, options);
 }
 
 /** How to address the instance through its socket with MariaDB's own tools. */
@@ -99,11 +104,10 @@ async function install(folder: string, dataFolder: string): Promise<void> {
 
 async function launch(
   folder: string,
-  dataFolder: string,
   options: PrivateDatabaseOptions,
+  { port, socket }: Omit<Instance, 'pid'>,
 ): Promise<Instance> {
-  const socket = join(makeSocketFolder(), 's');
-  const port = await findFreePort();
+  const dataFolder = join(folder, 'data');
   const logPath = join(folder, 'mariadb.log');
   const args = [
     '--no-defaults',
@@ -165,11 +169,22 @@ async function waitUntilReady(instance: Instance, folder: string, isAlive: () =>
   throw new StartProblem(`MariaDB on ${folder} does not answer; see ${join(folder, 'mariadb.log')}`);
 }
 
-function describeInstance(instance: Instance, adopted: boolean): PrivateDatabase {
+function describeInstance(
+  first: Instance,
+  adopted: boolean,
+  folder: string,
+  options: PrivateDatabaseOptions,
+): PrivateDatabase {
+  let instance = first;
   return {
-    port: instance.port,
-    socket: instance.socket,
+    port: first.port,
+    socket: first.socket,
     adopted,
+    isAlive: () => isDatabaseServer(instance.pid),
+    revive: async () => {
+      mkdirSync(dirname(first.socket), { recursive: true, mode: 0o700 });
+      instance = await launch(folder, options, first);
+    },
     stop: () => stopInstance(instance),
   };
 }
@@ -185,9 +200,9 @@ async function stopInstance(instance: Instance): Promise<void> {
   rmSync(dirname(instance.socket), { recursive: true, force: true });
 }
 
-function makeSocketFolder(): string {
+function makeSocketPath(): string {
   const preferred = join(tmpdir(), 'elbowroom-');
-  return mkdtempSync(preferred.length > SOCKET_PATH_LIMIT ? '/tmp/elbowroom-' : preferred);
+  return join(mkdtempSync(preferred.length > SOCKET_PATH_LIMIT ? '/tmp/elbowroom-' : preferred), 's');
 }
 
 /** A port of 127.0.0.1 that nobody uses at the moment. */

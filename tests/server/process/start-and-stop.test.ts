@@ -98,6 +98,22 @@ test('after SIGKILL the next start adopts the database, and what was committed i
   expect(instanceOf(folder)).toBeUndefined();
 });
 
+test('a database that is killed alone is started again, and the server goes on', async () => {
+  const server = spawnServer(folder);
+  const url = await server.ready;
+  const cookie = await signIn(url);
+  process.kill(instanceOf(folder)?.pid ?? 0, 'SIGKILL');
+  const seen: number[] = [];
+  while (!(seen.includes(503) && seen.at(-1) === 200)) {
+    seen.push((await fetch(`${url}/api/health`)).status);
+    await delay(20);
+  }
+  expect((await fetch(`${url}/api/session`, { headers: { cookie } })).status).toBe(200);
+  server.child.kill('SIGTERM');
+  expect(await server.exit).toBe(0);
+  expect(instanceOf(folder)).toBeUndefined();
+});
+
 test('a database that was killed as well is recovered', async () => {
   const first = spawnServer(folder);
   const cookie = await signIn(await first.ready);
