@@ -209,4 +209,8 @@ test('an invitation without address or role is refused with its paths', async ()
   expect(response.status).toBe(400);
   expect(response.body.problems.map((problem: { path: string }) => problem.path)).toEqual(['email', 'roles']);
   expect((await server.visitor().get('/api/invitations/by-token/short')).status).toBe(404);
+  const accepted = await server.visitor().post('/api/invitations/accept').send({ token: 'short', name: '' });
+  expect(accepted.status).toBe(400);
+  const paths = accepted.body.problems.map((problem: { path: string }) => problem.path);
+  expect(paths).toEqual(['token', 'name', 'password']);
 });
