@@ -7,7 +7,7 @@ import { unknownCount, type WireMesh } from '../mesh';
 export type IncidentField = { readonly re: Float64Array; readonly im: Float64Array; readonly weight: number };
 
 /** Distances of the sources beside the wire, wavelengths: most neighbours stand in the far field. */
-const distancesInWavelengths = [2, 6, 20];
+const distancesInWavelengths = [0.7, 3, 12];
 /** Plane waves by the share of k along the wire: broadside, as from afar on the same roof, and slanted. */
 const planeWaveShares = [0, 0.2];
 

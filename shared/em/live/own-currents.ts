@@ -5,6 +5,7 @@ import { waveNumber } from '../constants';
 import { selfBlock } from '../impedance-block';
 import { meshOfManyPieces, unknownCount, type WireMesh } from '../mesh';
 import type { Ground, Wire } from '../scene';
+import type { VerticalSamples } from './vertical-grid';
 import { incidentFamily, type IncidentField } from './incident-family';
 
 /**
@@ -24,10 +25,12 @@ export type OwnCurrents = {
   readonly impedance: ComplexMatrix;
   /** Port current of each function; null for a wire without a port. */
   readonly portCurrents: Float64Array | null;
+  /** The functions on vertical grids (vertical-samples.ts), by start height, sense and level. */
+  readonly samples: Map<string, VerticalSamples>;
 };
 
 /** Functions below this share of the strongest are left out. */
-const keptShare = 0.02;
+const keptShare = 0.005;
 /** The driven current weighs more than any response: it carries the port, and most of the coupling. */
 const drivenWeight = 10;
 
@@ -59,6 +62,7 @@ export function findOwnCurrents(ground: Ground, frequency: number, wire: Wire): 
     functions,
     impedance: reduced(system, vectors, count),
     portCurrents: portCurrentsOf(mesh, k, functions, count),
+    samples: new Map(),
   };
 }
 

@@ -4,7 +4,8 @@ import type { WireMesh } from '../mesh';
 import type { Ground, Wire } from '../scene';
 import type { OwnCurrents } from './own-currents';
 import { coupleOnce, coupleVertical, evaluateCoupling, type VerticalCoupling } from './vertical-coupling';
-import { gridLevel, gridStep, sampleVertical, type VerticalSamples } from './vertical-samples';
+import type { VerticalSamples } from './vertical-grid';
+import { gridLevel, gridStep, sampleVertical } from './vertical-samples';
 
 /** One wire as the couplings see it. */
 export type CouplingSide = {
@@ -76,10 +77,19 @@ function coupleVerticals(
   evaluateCoupling(kept, distance, pair.re, pair.im);
 }
 
+/** A wire carried up and down in free space must not fill the memory with its heights. */
+const mostSamplesKept = 32;
+
 function samplesOf(side: CouplingSide, level: number): VerticalSamples {
   const kept = side.samples.get(level);
   if (kept !== undefined) return kept;
-  const samples = sampleVertical(side.own, side.wire.start[2], side.sense === -1 ? -1 : 1, level);
+  const start = side.wire.start[2];
+  const up = side.sense === -1 ? -1 : 1;
+  const shared = side.own.samples;
+  const key = `${start} ${up} ${level}`;
+  const samples = shared.get(key) ?? sampleVertical(side.own, start, up, level);
+  if (shared.size >= mostSamplesKept) shared.clear();
+  shared.set(key, samples);
   side.samples.set(level, samples);
   return samples;
 }

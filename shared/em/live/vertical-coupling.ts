@@ -1,6 +1,6 @@
 import { freeSpaceImpedance } from '../constants';
 import type { Ground } from '../scene';
-import type { VerticalSamples } from './vertical-samples';
+import type { VerticalSamples } from './vertical-grid';
 
 /**
  * The coupling of two vertical wires as a function of their distance alone:
@@ -34,16 +34,24 @@ export function coupleVertical(
     ground === 'plane' ? Math.abs(source.first + source.points + receiver.first + receiver.points) : 0,
     ground === 'plane' ? Math.abs(source.first + receiver.first) : 0,
   );
-  const dense = new Float64Array((reach + 1) * size);
-  for (let a = 0; a < source.points; a += 1) {
-    for (let b = 0; b < receiver.points; b += 1) {
-      const difference = Math.abs(receiver.first + b - source.first - a);
-      addProducts(source, a, receiver, b, dense, difference * size);
-      if (ground === 'none') continue;
-      addProducts(source, a, receiver, b, dense, Math.abs(receiver.first + b + source.first + a) * size);
+  const heights = reach + 1;
+  const dense = new Float64Array(heights * size);
+  for (let m = 0, e = 0; m < source.count; m += 1) {
+    for (let n = 0; n < receiver.count; n += 1, e += 1) {
+      for (let a = 0; a < source.points; a += 1) {
+        const weight = source.sources[m * source.points + a]!;
+        const to = e * heights;
+        const from = n * receiver.points;
+        const height = source.first + a;
+        for (let b = 0; b < receiver.points; b += 1) {
+          const product = weight * receiver.receivers[from + b]!;
+          dense[to + Math.abs(receiver.first + b - height)]! += product;
+          if (ground === 'plane') dense[to + Math.abs(receiver.first + b + height)]! += product;
+        }
+      }
     }
   }
-  return compact(k, size, source.step, dense, reach + 1);
+  return compact(k, size, source.step, dense, heights);
 }
 
 /** Writes the impedances, ohm, of the two wires' functions at a distance (metres) into re and im. */
@@ -108,40 +116,48 @@ export function coupleOnce(
   re: Float64Array,
   im: Float64Array,
 ): void {
-  re.fill(0);
-  im.fill(0);
+  const { points } = receiver;
   const lowest = receiver.first - source.first - source.points + 1;
-  const differences = kernelAt(k, distance, source.step, lowest, source.points + receiver.points - 1);
+  const differences = kernelAt(k, distance, source.step, lowest, source.points + points - 1);
   const sums =
     ground === 'plane'
-      ? kernelAt(k, distance, source.step, receiver.first + source.first, source.points + receiver.points - 1)
+      ? kernelAt(k, distance, source.step, receiver.first + source.first, source.points + points - 1)
       : null;
-  const n = receiver.count;
-  const totalRe = new Float64Array(n);
-  const totalIm = new Float64Array(n);
+  const rowRe = new Float64Array(points);
+  const rowIm = new Float64Array(points);
+  const fieldRe = new Float64Array(receiver.count * source.points);
+  const fieldIm = new Float64Array(receiver.count * source.points);
   for (let a = 0; a < source.points; a += 1) {
-    totalRe.fill(0);
-    totalIm.fill(0);
-    for (let b = 0; b < receiver.points; b += 1) {
+    for (let b = 0; b < points; b += 1) {
       const difference = b - a + source.points - 1;
-      let gr = differences.re[difference]!;
-      let gi = differences.im[difference]!;
-      if (sums !== null) {
-        gr += sums.re[a + b]!;
-        gi += sums.im[a + b]!;
-      }
-      for (let q = 0; q < n; q += 1) {
-        const current = receiver.receivers[b * n + q]!;
-        totalRe[q]! += current * gr;
-        totalIm[q]! += current * gi;
-      }
+      rowRe[b] = differences.re[difference]! + (sums === null ? 0 : sums.re[a + b]!);
+      rowIm[b] = differences.im[difference]! + (sums === null ? 0 : sums.im[a + b]!);
     }
-    for (let m = 0; m < source.count; m += 1) {
-      const weight = source.sources[a * source.count + m]!;
-      for (let q = 0; q < n; q += 1) {
-        re[m * n + q]! += weight * totalRe[q]!;
-        im[m * n + q]! += weight * totalIm[q]!;
+    for (let n = 0; n < receiver.count; n += 1) {
+      let sumRe = 0;
+      let sumIm = 0;
+      for (let b = 0, from = n * points; b < points; b += 1, from += 1) {
+        sumRe += receiver.receivers[from]! * rowRe[b]!;
+        sumIm += receiver.receivers[from]! * rowIm[b]!;
       }
+      fieldRe[n * source.points + a] = sumRe;
+      fieldIm[n * source.points + a] = sumIm;
+    }
+  }
+  for (let m = 0, e = 0; m < source.count; m += 1) {
+    for (let n = 0; n < receiver.count; n += 1, e += 1) {
+      let sumRe = 0;
+      let sumIm = 0;
+      for (
+        let a = 0, w = m * source.points, f = n * source.points;
+        a < source.points;
+        a += 1, w += 1, f += 1
+      ) {
+        sumRe += source.sources[w]! * fieldRe[f]!;
+        sumIm += source.sources[w]! * fieldIm[f]!;
+      }
+      re[e] = sumRe;
+      im[e] = sumIm;
     }
   }
 }
@@ -166,23 +182,6 @@ function kernelAt(
   return { re, im };
 }
 
-function addProducts(
-  source: VerticalSamples,
-  a: number,
-  receiver: VerticalSamples,
-  b: number,
-  dense: Float64Array,
-  at: number,
-): void {
-  let next = at;
-  for (let m = 0; m < source.count; m += 1) {
-    const weight = source.sources[a * source.count + m]!;
-    for (let n = 0; n < receiver.count; n += 1, next += 1) {
-      dense[next]! += weight * receiver.receivers[b * receiver.count + n]!;
-    }
-  }
-}
-
 /** Leaves out the heights that never occur (between the differences and the sums of high-standing wires). */
 function compact(
   k: number,
@@ -193,12 +192,15 @@ function compact(
 ): VerticalCoupling {
   const used: number[] = [];
   for (let q = 0; q < heights; q += 1) {
-    if (dense.subarray(q * size, (q + 1) * size).some((value) => value !== 0)) used.push(q);
+    let occurs = false;
+    for (let e = 0; e < size && !occurs; e += 1) occurs = dense[e * heights + q] !== 0;
+    if (occurs) used.push(q);
   }
   const heightsSquared = Float64Array.from(used, (q) => (q * step) ** 2);
   const coefficients = new Float64Array(used.length * size);
   for (let e = 0; e < size; e += 1) {
-    used.forEach((q, i) => (coefficients[e * used.length + i] = dense[q * size + e]!));
+    for (let i = 0; i < used.length; i += 1)
+      coefficients[e * used.length + i] = dense[e * heights + used[i]!]!;
   }
   const room = () => new Float64Array(used.length);
   return { k, size, heightsSquared, coefficients, kernelRe: room(), kernelIm: room() };

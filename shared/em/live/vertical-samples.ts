@@ -1,25 +1,6 @@
 import { gaussLegendre } from '../../numerics/gauss-legendre';
 import type { OwnCurrents } from './own-currents';
-
-/**
- * A vertical wire's functions as equivalent sources and receivers on the heights i h that all vertical wires
- * share at one frequency. Between two wires at distance d the kernel e^{-jkR}/R then depends on i - j and, for
- * the image, on i + j alone. Sources are the node waves' weights (reaction.ts), receivers the current itself;
- * both are brought to the grid by Lagrange interpolation of the kernel, so that the ends need no grid point.
- * @source interpolation onto a regular grid: Bleszynski, Bleszynski and Jaroszewicz 1996
- */
-export type VerticalSamples = {
-  /** Grid step, metres. */
-  readonly step: number;
-  /** Index of the first grid height; the height is index * step above the reference. */
-  readonly first: number;
-  readonly points: number;
-  readonly count: number;
-  /** Points by functions, row-major: jumps of I'/k, positive upward. */
-  readonly sources: Float64Array;
-  /** Points by functions, row-major: integral of the current times the interpolating polynomial, metres. */
-  readonly receivers: Float64Array;
-};
+import type { VerticalSamples } from './vertical-grid';
 
 /** Points of an interpolation. */
 const stencil = 8;
@@ -27,7 +8,8 @@ const stencil = 8;
 const stepsPerWavelength = 5.5;
 const stepsPerDistance = 2.5;
 
-const segmentRule = gaussLegendre(4);
+/** Fourteen segments per wavelength: two points integrate their sinusoids to 1e-5. */
+const segmentRule = gaussLegendre(2);
 
 /**
  * Level of the grid for two wires at a distance whose heights differ (or add up) by at most `reach` metres: the
@@ -75,7 +57,7 @@ export function sampleVertical(own: OwnCurrents, start: number, up: 1 | -1, leve
       let jump = -ends * c * functions[i * count + m]!;
       if (i > 0) jump += functions[(i - 1) * count + m]!;
       if (i < chain.segments) jump += functions[(i + 1) * count + m]!;
-      for (let g = 0; g < stencil; g += 1) sources[(from + g) * count + m]! += up * jump * weights[g]!;
+      for (let g = 0; g < stencil; g += 1) sources[m * points + from + g]! += up * jump * weights[g]!;
     }
   }
   for (let p = 0; p < chain.segments; p += 1) {
@@ -87,7 +69,7 @@ export function sampleVertical(own: OwnCurrents, start: number, up: 1 | -1, leve
       const rising = weight * Math.sin(k * s);
       for (let m = 0; m < count; m += 1) {
         const current = falling * functions[p * count + m]! + rising * functions[(p + 1) * count + m]!;
-        for (let g = 0; g < stencil; g += 1) receivers[(from + g) * count + m]! += current * weights[g]!;
+        for (let g = 0; g < stencil; g += 1) receivers[m * points + from + g]! += current * weights[g]!;
       }
     }
   }
