@@ -83,22 +83,7 @@ export function blockFactorise(factors: BlockFactors): void {
         scaledIm[i * m + j] = ti;
       }
     }
-    for (let i = to; i < n; i += 1) {
-      for (let j = to; j <= i; j += 1) {
-        let sr = 0;
-        let si = 0;
-        for (let q = 0; q < m; q += 1) {
-          const tr = scaledRe[i * m + q]!;
-          const ti = scaledIm[i * m + q]!;
-          const zr = re[j * n + from + q]!;
-          const zi = im[j * n + from + q]!;
-          sr += tr * zr - ti * zi;
-          si += tr * zi + ti * zr;
-        }
-        re[i * n + j]! -= sr;
-        im[i * n + j]! -= si;
-      }
-    }
+    for (let i = to; i < n; i += 1) updateRow(factors, from, m, to, i, scaledRe, scaledIm);
     // The next block's diagonal is needed in full; its upper half mirrors the lower one.
     mirrorNextBlock(factors, b + 1);
     for (let i = to; i < n; i += 1) {
@@ -106,6 +91,54 @@ export function blockFactorise(factors: BlockFactors): void {
       im.set(scaledIm.subarray(i * m, (i + 1) * m), i * n + from);
     }
   }
+}
+
+/** Row i of the trailing matrix minus its scaled entries times those of the rows up to it, two rows at a time. */
+function updateRow(
+  { order: n, lowerRe: re, lowerIm: im }: BlockFactors,
+  from: number,
+  m: number,
+  to: number,
+  i: number,
+  scaledRe: Float64Array,
+  scaledIm: Float64Array,
+): void {
+  const row = i * n;
+  const scaled = i * m;
+  let j = to;
+  for (; j < i; j += 2) {
+    let ar = 0;
+    let ai = 0;
+    let br = 0;
+    let bi = 0;
+    for (let q = 0, a = j * n + from, b = a + n; q < m; q += 1, a += 1, b += 1) {
+      const tr = scaledRe[scaled + q]!;
+      const ti = scaledIm[scaled + q]!;
+      const xr = re[a]!;
+      const xi = im[a]!;
+      const yr = re[b]!;
+      const yi = im[b]!;
+      ar += tr * xr - ti * xi;
+      ai += tr * xi + ti * xr;
+      br += tr * yr - ti * yi;
+      bi += tr * yi + ti * yr;
+    }
+    re[row + j]! -= ar;
+    im[row + j]! -= ai;
+    re[row + j + 1]! -= br;
+    im[row + j + 1]! -= bi;
+  }
+  if (j > i) return;
+  let ar = 0;
+  let ai = 0;
+  for (let q = 0, a = j * n + from; q < m; q += 1, a += 1) {
+    const tr = scaledRe[scaled + q]!;
+    const ti = scaledIm[scaled + q]!;
+    ar += tr * re[a]! - ti * im[a]!;
+    ai += tr * im[a]! + ti * re[a]!;
+  }
+  re[row + j]! -= ar;
+  im[row + j]! -= ai;
 }
 
 /** y = L^-1 x for `columns` right sides, in place; x is row-major, order by columns. */
