@@ -127,11 +127,9 @@ class LiveLine implements EditorTransport {
   }
 
   private failToConnect(error: Error): void {
+    this.tell({ kind: 'disconnected' });
     const refusal = refusalOf(error);
-    if (!refusal) {
-      this.tell({ kind: 'disconnected' });
-      return;
-    }
+    if (!refusal) return;
     this.tell({ kind: 'refused', refusal });
     if (refusal.code === 'not-signed-in') void this.renew();
     else if (!this.socket.active) this.knockAgain();
@@ -150,12 +148,12 @@ class LiveLine implements EditorTransport {
   }
 }
 
-/** The refusal that the server put into a failed handshake; null when it could simply not be reached. */
-function refusalOf(error: Error & { readonly data?: unknown }): Refusal | null {
-  const { data } = error;
-  if (typeof data !== 'object' || data === null || !('code' in data)) return null;
-  const { code } = data;
-  if (typeof code !== 'string' || !Object.hasOwn(ERROR_STATUS, code)) return null;
-  const message = 'message' in data && typeof data.message === 'string' ? data.message : error.message;
+/** The refusal of a handshake, which carries its code as the message; null when the server was not reached. */
+function refusalOf({ message: code }: Error): Refusal | null {
+  if (!Object.hasOwn(ERROR_STATUS, code)) return null;
+  const message =
+    code === 'not-signed-in'
+      ? 'Your session ended. Sign in again to go on.'
+      : 'The server cannot take you in.';
   return { code: code as ErrorCode, message };
 }

@@ -58,6 +58,8 @@ export class Synchronisation {
   private stopListening: (() => void) | null = null;
   /** Counts connections and losses, so that answers of an earlier line are told apart. */
   private line = 0;
+  /** Counts joins: only the answer to the last one says where this client stands. */
+  private turn = 0;
   private isJoined = false;
   private isLoaded = false;
   private isStopped = true;
@@ -165,7 +167,9 @@ export class Synchronisation {
         if (event.layoutId === this.options.layoutId) this.expect(event.sequence);
         return;
       case 'layout-changed':
-        if (event.layoutId === this.options.layoutId && this.isJoined) void this.join(this.line);
+        if (event.layoutId === this.options.layoutId && this.connection.kind === 'online') {
+          void this.join(this.line);
+        }
         return;
       default:
         // Crosshairs, comments and revisions are heard by those whom they concern.
@@ -175,9 +179,13 @@ export class Synchronisation {
 
   private async join(line: number, isWhole = false): Promise<void> {
     const { transport, layoutId } = this.options;
+    // While the server puts this client into the room anew it takes no operations from it.
+    this.isJoined = false;
+    this.turn += 1;
+    const { turn } = this;
     const after = this.log.isOpen && !isWhole ? this.log.sequence : null;
     const answer = await transport.join({ layoutId, after, version: DOCUMENT_VERSION });
-    if (line !== this.line || this.isStopped) return;
+    if (line !== this.line || turn !== this.turn || this.isStopped) return;
     if (answer.ok === 'lost' || (!answer.ok && PASSING.includes(answer.refusal.code))) {
       this.joinRetry?.();
       this.joinRetry = this.options.clock.after(RETRY_DELAY, () => void this.join(line, isWhole));

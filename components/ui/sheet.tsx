@@ -95,7 +95,7 @@ export function Sheet({
         },
       ]}
     >
-      <View {...responder.panHandlers} style={{ touchAction: 'none' }}>
+      <View {...responder.panHandlers} style={webStyle({ touchAction: 'none' })}>
         <View
           role="slider"
           aria-label={`Height of ${label}`}

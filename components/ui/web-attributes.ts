@@ -42,6 +42,7 @@ export function webAttributes(attributes: Attributes): object {
 export function webStyle(style: {
   readonly transition?: string;
   readonly cursor?: 'grab' | 'grabbing' | 'crosshair' | 'default';
+  readonly touchAction?: 'none' | 'pan-y' | 'manipulation';
 }): object {
   return style;
 }
