@@ -18,3 +18,7 @@ if (!window.ResizeObserver) {
     disconnect() {}
   };
 }
+if (!globalThis.TextEncoder) {
+  const { TextDecoder, TextEncoder } = require('node:util');
+  Object.assign(globalThis, { TextDecoder, TextEncoder });
+}
