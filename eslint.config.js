@@ -17,6 +17,8 @@ module.exports = [
       eqeqeq: ['error', 'always', { null: 'ignore' }],
       'no-console': 'error',
       'import/no-default-export': 'off',
+      // fast-check's default export is its documented way in.
+      'import/no-named-as-default-member': 'off',
       'max-lines': ['error', { max: 400, skipBlankLines: false, skipComments: false }],
     },
   },
