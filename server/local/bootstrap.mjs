@@ -2,7 +2,9 @@
  * Makes sure of what the commands need before TypeScript can run: Node.js, the packages, MariaDB, and for the tests
  * Chromium. Depends on nothing but Node.js itself.
  *
- *   node server/local/bootstrap.mjs start|test
+ *   node server/local/bootstrap.mjs start|test|solve
+ *
+ * What it says goes to the error stream: the output belongs to the command that follows.
  */
 import { spawnSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
@@ -22,11 +24,11 @@ const DATABASE_SERVER = {
 const DATABASE_CLIENT = { packages: ['mariadb-client-core'], programs: ['mariadb', 'mariadb-dump'] };
 const BROWSER = { packages: ['chromium'], programs: ['chromium'] };
 
-const purpose = process.argv[2] === 'test' ? 'test' : 'start';
+const purpose = process.argv[2];
 checkNode();
 seeToPackages();
-seeToPrograms(purpose === 'start' && process.env.DATABASE_URL ? DATABASE_CLIENT : DATABASE_SERVER);
-if (purpose === 'test') seeToPrograms(BROWSER);
+if (purpose === 'start') seeToPrograms(process.env.DATABASE_URL ? DATABASE_CLIENT : DATABASE_SERVER);
+if (purpose === 'test') for (const programs of [DATABASE_SERVER, BROWSER]) seeToPrograms(programs);
 
 function checkNode() {
   const [major, minor] = process.versions.node.split('.').map(Number);
@@ -125,7 +127,7 @@ function run(command, args) {
 }
 
 function say(line) {
-  process.stdout.write(`${line}\n`);
+  process.stderr.write(`${line}\n`);
 }
 
 function give(line) {
