@@ -36,6 +36,8 @@ export interface LiveSolver {
   pattern(frequencyIndex: number, wire: string, request: PatternRequest): Pattern;
   /** All that is not held at one frequency. */
   validity(frequencyIndex: number): readonly ValidityEntry[];
+  /** Why the wire's numbers are not held at that frequency, or null when they are; wherever it stands. */
+  wireNotHeld(frequencyIndex: number, wire: string): ValidityEntry | null;
   /** Why the pair's numbers are not held at that frequency, or null when they are. */
   pairNotHeld(frequencyIndex: number, one: string, other: string): ValidityEntry | null;
 }
@@ -126,14 +128,18 @@ class OwnCurrentSolver implements LiveSolver {
     return validityOf(wires, system.frequency, 'live', (wire) => steps.get(wire)!);
   }
 
-  pairNotHeld(frequencyIndex: number, one: string, other: string): ValidityEntry | null {
+  wireNotHeld(frequencyIndex: number, wire: string): ValidityEntry | null {
     const system = this.systemAt(frequencyIndex);
-    const slots = [system.slots[this.wireIndex(one)]!, system.slots[this.wireIndex(other)]!];
-    for (const { wire, own } of slots) {
-      const entry = wireValidity(wire, system.frequency, 'live', own.mesh.chain.step)[0];
-      if (entry !== undefined) return entry;
-    }
-    return pairValidity(slots[0]!.wire, slots[1]!.wire);
+    const { wire: placed, own } = system.slots[this.wireIndex(wire)]!;
+    return wireValidity(placed, system.frequency, 'live', own.mesh.chain.step)[0] ?? null;
+  }
+
+  pairNotHeld(frequencyIndex: number, one: string, other: string): ValidityEntry | null {
+    return (
+      this.wireNotHeld(frequencyIndex, one) ??
+      this.wireNotHeld(frequencyIndex, other) ??
+      pairValidity(this.placed[this.wireIndex(one)]!.wire, this.placed[this.wireIndex(other)]!.wire)
+    );
   }
 
   private takeIds(wires: readonly Wire[]): void {
