@@ -25,11 +25,11 @@ export const STARTER_ANTENNAS = {
   'whip-2g4': { name: 'Quarter-wave whip, 2.4 GHz', elements: [whip('whip-2g4', 2442 * MHZ, 0.0005)] },
   'dipole-marine': {
     name: 'Base-station dipole, marine VHF',
-    elements: [dipole('dipole-marine', 159 * MHZ, 0.004)],
+    elements: [dipole('dipole-marine', 159 * MHZ, 0.003)],
   },
   'dipole-vhf': {
     name: 'Base-station dipole, land-mobile VHF',
-    elements: [dipole('dipole-vhf', 169 * MHZ, 0.004)],
+    elements: [dipole('dipole-vhf', 169 * MHZ, 0.003)],
   },
   'dipole-uhf': { name: 'Half-wave dipole, UHF', elements: [dipole('dipole-uhf', 460 * MHZ, 0.002)] },
   'dipole-cellular': {

@@ -2,8 +2,8 @@ import { STARTER_ANTENNAS, STARTER_RADIOS } from '../starter-parts';
 import type { DemoLayout } from './demo-layout';
 
 /**
- * The patrol van's roof. It opens with one pair that lacks isolation: the land-mobile VHF whip stands too near
- * the UHF whip, and its broadband noise reaches the UHF receiver. Farther apart the pair is clear.
+ * The patrol van's roof. It opens with one pair that lacks isolation: the land-mobile VHF whip was put into the
+ * hole next to the UHF whip, and its broadband noise reaches the UHF receiver. Over the cab the pair is clear.
  */
 export const DEMO_VAN: DemoLayout = {
   key: 'van',
@@ -11,7 +11,7 @@ export const DEMO_VAN: DemoLayout = {
   platformName: 'Patrol van roof',
   radios: {
     marine: STARTER_RADIOS.marine,
-    vhf: STARTER_RADIOS.vhf,
+    vhf: { ...STARTER_RADIOS.vhf, noiseDbcPerHz: -147 },
     uhf: STARTER_RADIOS.uhf,
     cellular: STARTER_RADIOS.cellular,
     navigation: STARTER_RADIOS.navigation,
@@ -36,8 +36,8 @@ export const DEMO_VAN: DemoLayout = {
       name: 'VHF land',
       part: STARTER_ANTENNAS['whip-vhf'],
       radio: 'vhf',
-      x: 1.75,
-      y: -0.4,
+      x: 1.5,
+      y: -0.1,
       feederLossDb: 0.5,
     },
     { name: 'UHF', part: STARTER_ANTENNAS['whip-uhf'], radio: 'uhf', x: 1.5, y: 0.02, feederLossDb: 0.8 },
