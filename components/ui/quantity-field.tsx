@@ -1,9 +1,8 @@
-import { useEffect, useRef, useState } from 'react';
+import { useState } from 'react';
+import type { QuantityReading } from '@/shared/units/read-quantity';
 import { Field } from './field';
 
-/** What a reading of an entry gives: the number in SI, or what is wrong with it. */
-export type QuantityReading =
-  { readonly ok: true; readonly value: number } | { readonly ok: false; readonly message: string };
+export type { QuantityReading };
 
 type QuantityFieldProps = {
   readonly label: string;
@@ -23,6 +22,9 @@ type QuantityFieldProps = {
   readonly testID?: string;
 };
 
+/** A text that is not (yet) the value, why it was refused, and what stood in the field then. */
+type Edit = { readonly text: string; readonly problem: string | null; readonly shownThen: string };
+
 /**
  * A number with its unit, as people write it. The text stays as it was typed while it is being edited and while
  * it is refused; a finished entry shows as the number that was understood.
@@ -41,33 +43,23 @@ export function QuantityField({
   testID,
 }: QuantityFieldProps) {
   const shown = value === null ? '' : format(value);
-  const [draft, setDraft] = useState<string | null>(null);
-  const [problem, setProblem] = useState<string | null>(null);
-  const lastShown = useRef(shown);
-
+  const [edit, setEdit] = useState<Edit | null>(null);
   // A value that changed elsewhere replaces a refused text, not one that is being typed.
-  useEffect(() => {
-    if (lastShown.current === shown) return;
-    lastShown.current = shown;
-    if (problem === null) return;
-    setDraft(null);
-    setProblem(null);
-  }, [shown, problem]);
+  const current = edit?.problem != null && edit.shownThen !== shown ? null : edit;
+  const draft = current?.text ?? null;
 
   const finish = () => {
     if (draft === null) return;
     if (draft.trim() === shown) {
-      setDraft(null);
-      setProblem(null);
+      setEdit(null);
       return;
     }
     const reading = read(draft);
     if (!reading.ok) {
-      setProblem(reading.message);
+      setEdit({ text: draft, problem: reading.message, shownThen: shown });
       return;
     }
-    setProblem(null);
-    setDraft(null);
+    setEdit(null);
     onCommit(reading.value);
   };
 
@@ -77,17 +69,13 @@ export function QuantityField({
       label={label}
       labelHidden={labelHidden}
       value={draft ?? shown}
-      onChange={(text) => {
-        setDraft(text);
-        setProblem(null);
-      }}
+      onChange={(text) => setEdit({ text, problem: null, shownThen: shown })}
       onBlur={finish}
       onKeyDown={(event) => {
         if (event.key === 'Enter') finish();
         else if (event.key === 'Escape' && draft !== null) {
           event.stopPropagation();
-          setDraft(null);
-          setProblem(null);
+          setEdit(null);
         } else if (step !== undefined && value !== null && draft === null && !readOnly) {
           const sign = event.key === 'ArrowUp' ? 1 : event.key === 'ArrowDown' ? -1 : 0;
           if (sign === 0) return;
@@ -96,7 +84,7 @@ export function QuantityField({
         }
       }}
       hint={hint}
-      error={problem ?? (draft === null ? error : undefined)}
+      error={current?.problem ?? (draft === null ? error : undefined)}
       understood={
         reading?.ok && format(reading.value) !== draft?.trim() ? `= ${format(reading.value)}` : undefined
       }
