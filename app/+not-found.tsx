@@ -1,0 +1,5 @@
+import { NotFoundScreen } from '@/components/screens/not-found-screen';
+
+export default function NotFound() {
+  return <NotFoundScreen />;
+}

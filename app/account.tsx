@@ -1,0 +1,5 @@
+import { AccountScreen } from '@/components/screens/account-screen';
+
+export default function Account() {
+  return <AccountScreen />;
+}

@@ -1,0 +1,5 @@
+import { PeopleScreen } from '@/components/screens/people-screen';
+
+export default function People() {
+  return <PeopleScreen />;
+}

@@ -1,0 +1,28 @@
+import type { IconName } from '@/components/ui/icon';
+import type { Session } from '@/shared/api/session';
+
+/** A place of the navigation. */
+export type Place = {
+  readonly href: '/jobs' | '/frozen' | '/parts' | '/people' | '/mails' | '/account';
+  readonly label: string;
+  readonly icon: IconName;
+};
+
+const ACCOUNT: Place = { href: '/account', label: 'Account', icon: 'account' };
+
+/** Where this member may go, in the order of the navigation. */
+export function placesFor({ abilities }: Session): readonly Place[] {
+  const places: Place[] = [];
+  if (abilities.seeJobs) {
+    places.push({ href: '/jobs', label: 'Jobs', icon: 'jobs' });
+    places.push({ href: '/parts', label: 'Parts', icon: 'parts' });
+  } else places.push({ href: '/frozen', label: 'Frozen', icon: 'lock' });
+  places.push({ href: '/people', label: 'People', icon: 'people' });
+  if (abilities.seeMails) places.push({ href: '/mails', label: 'Mails', icon: 'mail' });
+  return [...places, ACCOUNT];
+}
+
+/** Where this member begins. */
+export function homeOf(session: Session): '/jobs' | '/frozen' {
+  return session.abilities.seeJobs ? '/jobs' : '/frozen';
+}
