@@ -1,5 +1,5 @@
 import { boxAround, boxContains } from '../geometry/box';
-import { polygonContains, polygonContainsStrictly, type Polygon } from '../geometry/polygon';
+import { EDGE_TOLERANCE, polygonContains, polygonContainsStrictly, type Polygon } from '../geometry/polygon';
 import type { AntennaPart, LayoutDocument, PlacedAntenna, Point, Surface } from './document';
 
 /** Why an antenna may not stand somewhere; `objectId` names the keep-out or obstacle. */
@@ -41,7 +41,8 @@ export function placementProblem(document: LayoutDocument, spot: Spot): Placemen
   }
   const { low, high } = verticalExtent(spot);
   for (const obstacle of Object.values(document.obstacles)) {
-    const clear = low >= obstacle.base + obstacle.height || high < obstacle.base;
+    // What stands on top of it touches it: the sum of two heights may end a rounding above the mount.
+    const clear = low >= obstacle.base + obstacle.height - EDGE_TOLERANCE || high < obstacle.base;
     if (!clear && inside(obstacle.outline, spot)) {
       return {
         code: 'obstacle',
