@@ -1,4 +1,4 @@
-import { pointDistance, type Point } from './point';
+import { pointAdd, pointDistance, pointSubtract, type Point } from './point';
 import { segmentNearestPoint, segmentsMeet, type Segment } from './segment';
 
 /** A closed outline of at least three points; the last joins the first. */
@@ -12,11 +12,15 @@ export function polygonEdges(outline: Polygon): Segment[] {
   return outline.map((start, index) => ({ start, end: pointAt(outline, index + 1) }));
 }
 
-/** Area with its sign, m2: positive when the outline runs anticlockwise. Sum of cross products over two. */
+/**
+ * Area with its sign, m2: positive when the outline runs anticlockwise. Sum of cross products over two, seen from
+ * the first corner: from a datum far away the area of something small would drown in rounding.
+ */
 export function polygonSignedArea(outline: Polygon): number {
+  const origin = pointAt(outline, 0);
   let sum = 0;
-  outline.forEach((a, index) => {
-    const b = pointAt(outline, index + 1);
+  outline.forEach((corner, index) => {
+    const [a, b] = [pointSubtract(corner, origin), pointSubtract(pointAt(outline, index + 1), origin)];
     sum += a.x * b.y - b.x * a.y;
   });
   return sum / 2;
@@ -30,16 +34,18 @@ export function polygonArea(outline: Polygon): number {
 /** Centre of area; the mean of the corners when the outline has no area. */
 export function polygonCentroid(outline: Polygon): Point {
   const area = polygonSignedArea(outline);
+  const origin = pointAt(outline, 0);
   let [x, y, meanX, meanY] = [0, 0, 0, 0];
-  outline.forEach((a, index) => {
-    const b = pointAt(outline, index + 1);
+  outline.forEach((corner, index) => {
+    const [a, b] = [pointSubtract(corner, origin), pointSubtract(pointAt(outline, index + 1), origin)];
     const cross = a.x * b.y - b.x * a.y;
     x += (a.x + b.x) * cross;
     y += (a.y + b.y) * cross;
     meanX += a.x / outline.length;
     meanY += a.y / outline.length;
   });
-  return Math.abs(area) < 1e-15 ? { x: meanX, y: meanY } : { x: x / (6 * area), y: y / (6 * area) };
+  const centre = Math.abs(area) < 1e-15 ? { x: meanX, y: meanY } : { x: x / (6 * area), y: y / (6 * area) };
+  return pointAdd(origin, centre);
 }
 
 /** True when the point lies inside or on the edge (within `EDGE_TOLERANCE`). Even-odd rule. */

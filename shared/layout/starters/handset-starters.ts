@@ -16,7 +16,8 @@ export const HANDSET_BOARD: StarterPlatform = {
     const { length, width } = footprint(dimensions);
     const half = width / 2;
     const clearance = length * 0.067;
-    const corner = width * 0.08;
+    // A short, wide board has little clearance: the cut corner stays within it.
+    const corner = Math.min(width * 0.08, clearance * 0.6);
     const height = dimension(dimensions, 'height');
     const outline = chamfered(length, half, corner);
     return {
