@@ -14,7 +14,7 @@ import type { ShelfPart } from '@/components/editor/editor-snapshot';
 import type { LayoutEditor } from '@/components/editor/layout-editor';
 import { drawing } from '@/components/theme/drawing';
 import { useTheme } from '@/components/theme/use-theme';
-import { webAttributes, type KeyPress } from '@/components/ui/web-attributes';
+import { webAttributes, webStyle, type KeyPress } from '@/components/ui/web-attributes';
 import type { Comment, CommentTarget } from '@/shared/api/comments';
 import { boxAround } from '@/shared/geometry/box';
 import { assertNever } from '@/shared/errors';
@@ -175,13 +175,10 @@ export function PlanCanvas(props: PlanCanvasProps) {
         onKeyDown: (press) =>
           answerKey(press, { editor, views, gestures: gestures.current, onEditNumbers: props.onEditNumbers }),
       })}
-      style={{
-        flex: 1,
-        overflow: 'hidden',
-        backgroundColor: color.ground,
-        touchAction: 'none',
-        userSelect: 'none',
-      }}
+      style={[
+        webStyle({ touchAction: 'none' }),
+        { flex: 1, overflow: 'hidden', backgroundColor: color.ground, userSelect: 'none' },
+      ]}
     >
       {size && view && drawn ? (
         <>

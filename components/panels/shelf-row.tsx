@@ -7,6 +7,7 @@ import { useTheme } from '@/components/theme/use-theme';
 import type { WebPressState } from '@/components/ui/button';
 import { Icon } from '@/components/ui/icon';
 import { Text } from '@/components/ui/text';
+import { webStyle } from '@/components/ui/web-attributes';
 import type { AntennaPart } from '@/shared/layout/document';
 import { frequencyText } from './estimate-words';
 
@@ -50,7 +51,7 @@ export function ShelfRow({ part, disabled, onPull, onPlace }: ShelfRowProps) {
     else onPlace(shelfPart);
   };
   return (
-    <View role="listitem" ref={row} style={{ touchAction: 'pan-y' }}>
+    <View role="listitem" ref={row} style={webStyle({ touchAction: 'pan-y' })}>
       <Pressable
         role="button"
         aria-label={`Place ${part.name}, ${describePart(part)}`}
@@ -59,26 +60,30 @@ export function ShelfRow({ part, disabled, onPull, onPlace }: ShelfRowProps) {
           pulled.current = false;
         }}
         onPress={place}
-        style={({ pressed, hovered }: WebPressState) => ({
-          minHeight: target.min,
-          flexDirection: 'row',
-          alignItems: 'center',
-          borderBottomWidth: line.hair,
-          borderColor: color.rule,
-          cursor: disabled ? 'auto' : 'grab',
-          userSelect: 'none',
-          backgroundColor: !disabled && (pressed || hovered === true) ? color.hover : 'transparent',
-        })}
+        style={({ pressed, hovered }: WebPressState) => [
+          webStyle({ cursor: disabled ? 'default' : 'grab' }),
+          {
+            minHeight: target.min,
+            flexDirection: 'row',
+            alignItems: 'center',
+            borderBottomWidth: line.hair,
+            borderColor: color.rule,
+            userSelect: 'none',
+            backgroundColor: !disabled && (pressed || hovered === true) ? color.hover : 'transparent',
+          },
+        ]}
       >
         <View
-          style={{
-            width: target.min,
-            height: target.min,
-            marginLeft: -space.m,
-            alignItems: 'center',
-            justifyContent: 'center',
-            touchAction: 'none',
-          }}
+          style={[
+            webStyle({ touchAction: 'none' }),
+            {
+              width: target.min,
+              height: target.min,
+              marginLeft: -space.m,
+              alignItems: 'center',
+              justifyContent: 'center',
+            },
+          ]}
         >
           <Icon name="antenna" tone={disabled ? 'inkSoft' : 'ink'} />
         </View>
@@ -98,7 +103,8 @@ export function describePart({ elements }: AntennaPart): string {
   const first = elements[0];
   if (!first) return 'no element';
   if (elements.length > 1) return `${elements.length} elements`;
-  if (first.kind === 'declared') return `${frequencyText((first.band.from + first.band.to) / 2)}, not computed yet`;
+  if (first.kind === 'declared')
+    return `${frequencyText((first.band.from + first.band.to) / 2)}, not computed yet`;
   if (first.quarterWaveAt !== null) return frequencyText(first.quarterWaveAt);
   return `${Math.round(first.length * 1000)} mm`;
 }

@@ -1,6 +1,6 @@
-import { Link as RouterLink, type Href } from 'expo-router';
+import { Link as RouterLink, useRouter, type Href } from 'expo-router';
 import type { ReactNode } from 'react';
-import { Pressable, type StyleProp, type ViewStyle } from 'react-native';
+import { Pressable, type GestureResponderEvent, type StyleProp, type ViewStyle } from 'react-native';
 import { line, radius, space, target } from '../theme/tokens';
 import { useTheme } from '../theme/use-theme';
 import type { WebPressState } from './button';
@@ -35,22 +35,21 @@ type LinkAreaProps = LinkProps & { readonly style?: StyleProp<ViewStyle> };
 export function LinkArea({ href, label, children, current, style }: LinkAreaProps) {
   const { color } = useTheme();
   return (
-    <RouterLink href={href} asChild>
-      <Pressable
-        aria-label={label}
-        {...webAttributes({ 'aria-current': current ? 'page' : undefined })}
-        style={({ pressed, hovered }: WebPressState) => [
-          {
-            minHeight: target.min,
-            justifyContent: 'center',
-            backgroundColor: pressed || hovered === true ? color.hover : 'transparent',
-          },
-          style,
-        ]}
-      >
-        {children}
-      </Pressable>
-    </RouterLink>
+    <Pressable
+      aria-label={label}
+      {...useLinkPress(href)}
+      {...webAttributes({ href: String(href), 'aria-current': current ? 'page' : undefined })}
+      style={({ pressed, hovered }: WebPressState) => [
+        {
+          minHeight: target.min,
+          justifyContent: 'center',
+          backgroundColor: pressed || hovered === true ? color.hover : 'transparent',
+        },
+        style,
+      ]}
+    >
+      {children}
+    </Pressable>
   );
 }
 
@@ -60,30 +59,44 @@ type LinkButtonProps = LinkProps & { readonly icon?: IconName; readonly primary?
 export function LinkButton({ href, label, icon, primary = false }: LinkButtonProps) {
   const { color } = useTheme();
   return (
-    <RouterLink href={href} asChild>
-      <Pressable
-        aria-label={label}
-        style={({ pressed, hovered }: WebPressState) => ({
-          minHeight: target.min,
-          flexDirection: 'row',
-          alignItems: 'center',
-          justifyContent: 'center',
-          gap: space.s,
-          paddingHorizontal: space.l,
-          borderRadius: radius.m,
-          borderWidth: line.hair,
-          borderColor: primary ? 'transparent' : color.edge,
-          backgroundColor:
-            pressed || hovered === true
-              ? color[primary ? 'actionHover' : 'hover']
-              : color[primary ? 'action' : 'sheet'],
-        })}
-      >
-        {icon ? <Icon name={icon} tone={primary ? 'onAction' : 'ink'} /> : null}
-        <Text variant="strong" tone={primary ? 'onAction' : 'ink'}>
-          {label}
-        </Text>
-      </Pressable>
-    </RouterLink>
+    <Pressable
+      aria-label={label}
+      {...useLinkPress(href)}
+      {...webAttributes({ href: String(href) })}
+      style={({ pressed, hovered }: WebPressState) => ({
+        minHeight: target.min,
+        flexDirection: 'row',
+        alignItems: 'center',
+        justifyContent: 'center',
+        alignSelf: 'flex-start',
+        gap: space.s,
+        paddingHorizontal: space.l,
+        borderRadius: radius.m,
+        borderWidth: line.hair,
+        borderColor: primary ? 'transparent' : color.edge,
+        backgroundColor:
+          pressed || hovered === true
+            ? color[primary ? 'actionHover' : 'hover']
+            : color[primary ? 'action' : 'sheet'],
+      })}
+    >
+      {icon ? <Icon name={icon} tone={primary ? 'onAction' : 'ink'} /> : null}
+      <Text variant="strong" tone={primary ? 'onAction' : 'ink'}>
+        {label}
+      </Text>
+    </Pressable>
   );
+}
+
+/** Goes there inside the page; a press with a modifier key is left to the browser (new tab, new window). */
+function useLinkPress(href: Href): { readonly onPress: (event: GestureResponderEvent) => void } {
+  const router = useRouter();
+  return {
+    onPress: (event) => {
+      const { ctrlKey, metaKey, shiftKey, altKey } = event.nativeEvent as unknown as MouseEvent;
+      if (ctrlKey || metaKey || shiftKey || altKey) return;
+      event.preventDefault();
+      router.push(href);
+    },
+  };
 }
