@@ -46,12 +46,13 @@ export function TextEntry({
       onKeyDown={(event) => {
         if (event.key === 'Enter') finish();
         if (event.key === 'Escape' && draft !== null) {
-          event.stopPropagation();
+          event.preventDefault();
           setDraft(null);
           setError(null);
         }
       }}
       error={error ?? undefined}
+      refused={error !== null}
       readOnly={readOnly}
       maxLength={200}
       testID={testID}

@@ -3,7 +3,9 @@ import { iconSize, line, radius, space, target } from '../theme/tokens';
 import { useTheme } from '../theme/use-theme';
 import type { WebPressState } from './button';
 import { Icon } from './icon';
+import { onSpace } from './on-space';
 import { Text } from './text';
+import { webAttributes } from './web-attributes';
 
 type CheckboxProps = {
   readonly label: string;
@@ -23,6 +25,7 @@ export function Checkbox({ label, checked, onChange, hint, disabled = false }: C
       aria-label={hint ? `${label}. ${hint}` : label}
       disabled={disabled}
       onPress={() => onChange(!checked)}
+      {...webAttributes({ onKeyDown: disabled ? undefined : onSpace(() => onChange(!checked)) })}
       style={({ pressed, hovered }: WebPressState) => ({
         minHeight: target.min,
         flexDirection: 'row',

@@ -3,6 +3,7 @@ import { Pressable, View } from 'react-native';
 import { line, radius, space, target } from '../theme/tokens';
 import { useTheme } from '../theme/use-theme';
 import type { WebPressState } from './button';
+import { onSpace } from './on-space';
 import { Text } from './text';
 import { webAttributes } from './web-attributes';
 
@@ -59,12 +60,17 @@ export function Choice<T extends string>({
               onPress={() => onChange(option.value)}
               {...webAttributes({
                 tabIndex: chosen && !disabled ? 0 : -1,
-                onKeyDown: (event) => {
-                  const step = ARROWS[event.key];
-                  if (step === undefined) return;
-                  event.preventDefault();
-                  move(step);
-                },
+                onKeyDown: disabled
+                  ? undefined
+                  : onSpace(
+                      () => onChange(option.value),
+                      (event) => {
+                        const step = ARROWS[event.key];
+                        if (step === undefined) return;
+                        event.preventDefault();
+                        move(step);
+                      },
+                    ),
               })}
               style={({ pressed, hovered }: WebPressState) => ({
                 minHeight: target.min,

@@ -1,4 +1,4 @@
-import { useId, useState, type ReactNode, type Ref } from 'react';
+import { useId, useRef, useState, type ReactNode, type Ref } from 'react';
 import { TextInput, View, type TextInputProps } from 'react-native';
 import { line, measure, radius, space, target } from '../theme/tokens';
 import { useTheme } from '../theme/use-theme';
@@ -84,10 +84,13 @@ export type FieldProps = {
   readonly onChange: (value: string) => void;
   readonly onBlur?: () => void;
   readonly onFocus?: () => void;
+  /** `preventDefault` on Escape keeps it to the field: a dialog around it stays open. */
   readonly onKeyDown?: (event: KeyPress) => void;
   readonly hint?: string;
   readonly error?: string;
   readonly understood?: string;
+  /** What stands in it is not what was taken over: a form around it is not sent. */
+  readonly refused?: boolean;
   readonly labelHidden?: boolean;
   readonly placeholder?: string;
   readonly required?: boolean;
@@ -115,6 +118,7 @@ export function Field({
   hint,
   error,
   understood,
+  refused = false,
   labelHidden = false,
   placeholder,
   required = false,
@@ -132,6 +136,13 @@ export function Field({
   const { color } = useTheme();
   const id = useId();
   const [revealed, setRevealed] = useState(false);
+  const escapeTaken = useRef(false);
+  const keyUp = {
+    // A dialog closes when Escape is let go.
+    onKeyUp: (event: KeyPress) => {
+      if (event.key === 'Escape' && escapeTaken.current) event.stopPropagation();
+    },
+  };
   return (
     <FieldFrame
       label={label}
@@ -149,6 +160,11 @@ export function Field({
           onChangeText={onChange}
           onBlur={onBlur}
           onFocus={onFocus}
+          // A TextInput hands keys on here only; the event is the browser's, not the narrow one of its type.
+          onKeyPress={(event) => {
+            onKeyDown?.(event as unknown as KeyPress);
+            escapeTaken.current = event.nativeEvent.key === 'Escape' && event.isDefaultPrevented();
+          }}
           placeholder={placeholder}
           readOnly={readOnly}
           multiline={multiline}
@@ -159,15 +175,17 @@ export function Field({
           inputMode={inputMode}
           autoFocus={autoFocus}
           maxLength={maxLength}
-          submitBehavior={multiline ? 'newline' : 'submit'}
+          // Enter takes an entry over and leaves the focus where it is.
+          blurOnSubmit={false}
           testID={testID}
           aria-label={labelHidden ? label : undefined}
           {...webAttributes({
             'aria-describedby': describedBy(id, { hint, error, understood: error ? undefined : understood }),
             'aria-invalid': error ? true : undefined,
             'aria-required': required || undefined,
-            onKeyDown,
+            dataSet: refused ? { refused: 'true' } : undefined,
           })}
+          {...keyUp}
           style={[
             textStyle(figures ? 'figures' : 'body'),
             {

@@ -15,12 +15,17 @@ const FORM_STYLE: CSSProperties = {
   margin: space.none,
 };
 
-/** A form of the page: Enter in a field sends it, and password managers know it for what it is. */
+/**
+ * A form of the page: Enter in a field sends it, and password managers know it for what it is. While a field holds a
+ * text that it refused, the form is not sent and that field gets the focus.
+ */
 export function Form({ label, onSubmit, children }: FormProps) {
   const submit = (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault();
     event.stopPropagation();
-    onSubmit();
+    const refused = event.currentTarget.querySelector<HTMLElement>('[data-refused]');
+    if (refused) refused.focus();
+    else onSubmit();
   };
   return (
     <form aria-label={label} noValidate onSubmit={submit} style={FORM_STYLE}>

@@ -1,4 +1,4 @@
-import { useEffect, useId, useRef, useState, type ReactElement } from 'react';
+import { useEffect, useId, useState, type ReactElement } from 'react';
 import { Modal, Pressable, View } from 'react-native';
 import { line, measure, radius, space, target } from '../theme/tokens';
 import { useSizeClass } from '../theme/use-size-class';
@@ -6,6 +6,7 @@ import { useTheme } from '../theme/use-theme';
 import type { WebPressState } from './button';
 import { Icon, type IconName } from './icon';
 import { IconButton } from './icon-button';
+import { onSpace } from './on-space';
 import { Text } from './text';
 import { webAttributes } from './web-attributes';
 
@@ -33,11 +34,11 @@ export function Menu({ label, items, icon = 'more', trigger }: MenuProps) {
   const { color } = useTheme();
   const phone = useSizeClass() === 'phone';
   const menuId = useId();
-  const anchor = useRef<View>(null);
+  const [anchor, setAnchor] = useState<View | null>(null);
   const [place, setPlace] = useState<Place | null>(null);
 
   const open = () => {
-    anchor.current?.measureInWindow((x, y, width, height) => {
+    anchor?.measureInWindow((x, y, width, height) => {
       const roomBelow = globalThis.innerHeight - y - height;
       const needed = items.length * target.min + space.l;
       setPlace({
@@ -47,6 +48,11 @@ export function Menu({ label, items, icon = 'more', trigger }: MenuProps) {
     });
   };
   const close = () => setPlace(null);
+  const choose = (item: MenuItem) => {
+    if (item.disabled) return;
+    close();
+    item.onPress();
+  };
 
   useEffect(() => {
     if (!place) return;
@@ -58,7 +64,7 @@ export function Menu({ label, items, icon = 'more', trigger }: MenuProps) {
   };
 
   return (
-    <View ref={anchor} collapsable={false}>
+    <View ref={setAnchor} collapsable={false}>
       {trigger ? (
         trigger(open, place !== null)
       ) : (
@@ -102,18 +108,18 @@ export function Menu({ label, items, icon = 'more', trigger }: MenuProps) {
                 role="menuitem"
                 aria-label={item.label}
                 disabled={item.disabled}
-                onPress={() => {
-                  close();
-                  item.onPress();
-                }}
+                onPress={() => choose(item)}
                 {...webAttributes({
                   tabIndex: index === 0 ? 0 : -1,
-                  onKeyDown: (event) => {
-                    const target = KEYS[event.key]?.(index, items.length);
-                    if (target === undefined) return;
-                    event.preventDefault();
-                    focusItem(target);
-                  },
+                  onKeyDown: onSpace(
+                    () => choose(item),
+                    (event) => {
+                      const to = KEYS[event.key]?.(index, items.length);
+                      if (to === undefined) return;
+                      event.preventDefault();
+                      focusItem(to);
+                    },
+                  ),
                 })}
                 style={({ pressed, hovered }: WebPressState) => ({
                   minHeight: target.min,

@@ -74,7 +74,7 @@ export function QuantityField({
       onKeyDown={(event) => {
         if (event.key === 'Enter') finish();
         else if (event.key === 'Escape' && draft !== null) {
-          event.stopPropagation();
+          event.preventDefault();
           setEdit(null);
         } else if (step !== undefined && value !== null && draft === null && !readOnly) {
           const sign = event.key === 'ArrowUp' ? 1 : event.key === 'ArrowDown' ? -1 : 0;
@@ -88,6 +88,7 @@ export function QuantityField({
       understood={
         reading?.ok && format(reading.value) !== draft?.trim() ? `= ${format(reading.value)}` : undefined
       }
+      refused={current?.problem != null}
       readOnly={readOnly}
       figures
       testID={testID}

@@ -19,7 +19,7 @@ export function SearchField({ label, value, onChange }: SearchFieldProps) {
       maxLength={120}
       onKeyDown={(event) => {
         if (event.key !== 'Escape' || value === '') return;
-        event.stopPropagation();
+        event.preventDefault();
         onChange('');
       }}
     />

@@ -1,18 +1,15 @@
-import { useEffect, useMemo, useRef, useState, type ReactNode } from 'react';
-import { PanResponder, ScrollView, useWindowDimensions, View } from 'react-native';
+import { useEffect, useMemo, useState, type ReactNode } from 'react';
+import { ScrollView, useWindowDimensions, View } from 'react-native';
 import { duration, layer, line, measure, radius, space, target } from '../theme/tokens';
 import { useReducedMotion } from '../theme/use-media';
 import { useTheme } from '../theme/use-theme';
+import { SHEET_STOPS, SheetDrag, type SheetStop } from './sheet-drag';
 import { webAttributes, webStyle } from './web-attributes';
 
-export type SheetStop = 'peek' | 'half' | 'full';
+export type { SheetStop };
 
-const ORDER: readonly SheetStop[] = ['peek', 'half', 'full'];
 const HALF_SHARE = 0.5;
 const FULL_SHARE = 0.88;
-/** A flick faster than this (px per ms) goes to the next stop whatever the distance. */
-const FLICK = 0.4;
-
 type SheetProps = {
   readonly label: string;
   readonly stop: SheetStop;
@@ -26,7 +23,10 @@ type SheetProps = {
   readonly peek?: number;
 };
 
-/** A sheet from below that shares the screen with what it is about: peek, half, full. */
+/**
+ * A sheet from below that shares the screen with what it is about: peek, half, full. Pulled by its head, pressed there
+ * (the next stop), or moved with the arrow keys on its handle.
+ */
 export function Sheet({
   label,
   stop,
@@ -45,31 +45,12 @@ export function Sheet({
     return { peek, half: Math.max(peek, room * HALF_SHARE), full: room * FULL_SHARE };
   }, [windowHeight, bottom, peek]);
 
-  const latest = useRef({ stop, heights, onStopChange });
-  useEffect(() => {
-    latest.current = { stop, heights, onStopChange };
-  });
-  const [responder] = useState(() =>
-    PanResponder.create({
-      onMoveShouldSetPanResponder: (_, { dy }) => Math.abs(dy) > space.xs,
-      onPanResponderMove: (_, { dy }) => {
-        const { heights: h, stop: s } = latest.current;
-        setPulled(Math.min(h.full, Math.max(h.peek, h[s] - dy)));
-      },
-      onPanResponderRelease: (_, { dy, vy }) => {
-        const { heights: h, stop: s, onStopChange: change } = latest.current;
-        setPulled(null);
-        const at = ORDER.indexOf(s);
-        const flicked = Math.abs(vy) > FLICK ? ORDER[at + (vy < 0 ? 1 : -1)] : undefined;
-        change(flicked ?? nearestStop(h[s] - dy, h));
-      },
-      onPanResponderTerminate: () => setPulled(null),
-    }),
-  );
+  const [drag] = useState(() => new SheetDrag(setPulled));
+  useEffect(() => drag.follow({ stop, heights, onStopChange }));
 
-  const index = ORDER.indexOf(stop);
+  const index = SHEET_STOPS.indexOf(stop);
   const go = (to: number) => {
-    const next = ORDER[to];
+    const next = SHEET_STOPS[to];
     if (next) onStopChange(next);
   };
 
@@ -95,7 +76,11 @@ export function Sheet({
         },
       ]}
     >
-      <View {...responder.panHandlers} style={webStyle({ touchAction: 'none' })}>
+      <View
+        {...drag.handlers}
+        {...webAttributes({ onClick: () => drag.press() })}
+        style={webStyle({ touchAction: 'none' })}
+      >
         <View
           role="slider"
           aria-label={`Height of ${label}`}
@@ -103,7 +88,7 @@ export function Sheet({
             tabIndex: 0,
             'aria-orientation': 'vertical',
             'aria-valuemin': 0,
-            'aria-valuemax': ORDER.length - 1,
+            'aria-valuemax': SHEET_STOPS.length - 1,
             'aria-valuenow': index,
             'aria-valuetext': stop,
             onKeyDown: (event) => {
@@ -138,11 +123,5 @@ export function Sheet({
         {children}
       </ScrollView>
     </View>
-  );
-}
-
-function nearestStop(height: number, heights: Readonly<Record<SheetStop, number>>): SheetStop {
-  return ORDER.reduce((best, candidate) =>
-    Math.abs(heights[candidate] - height) < Math.abs(heights[best] - height) ? candidate : best,
   );
 }

@@ -3,6 +3,7 @@ import { Pressable, ScrollView, View } from 'react-native';
 import { line, space, target } from '../theme/tokens';
 import { useTheme } from '../theme/use-theme';
 import type { WebPressState } from './button';
+import { onSpace } from './on-space';
 import { Text } from './text';
 import { webAttributes } from './web-attributes';
 
@@ -84,11 +85,7 @@ export function Table<Row>({
             aria-label={rowLabel?.(item)}
             aria-selected={chosen}
             onPress={() => onRowPress(item)}
-            {...webAttributes({
-              onKeyDown: (event) => {
-                if (event.key === 'Enter') onRowPress(item);
-              },
-            })}
+            {...webAttributes({ onKeyDown: onSpace(() => onRowPress(item)) })}
             style={({ pressed, hovered }: WebPressState) => ({
               ...row,
               backgroundColor:

@@ -20,6 +20,7 @@ type Attributes = {
   readonly dataSet?: Readonly<Record<string, string>>;
   readonly href?: string;
   readonly onKeyDown?: (event: KeyPress) => void;
+  readonly onClick?: () => void;
 };
 
 /** What a key handler may look at; the browser's own event has more. */
@@ -29,6 +30,8 @@ export type KeyPress = {
   readonly ctrlKey: boolean;
   readonly metaKey: boolean;
   readonly altKey: boolean;
+  readonly target?: unknown;
+  readonly currentTarget?: unknown;
   preventDefault(): void;
   stopPropagation(): void;
 };

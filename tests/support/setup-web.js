@@ -22,3 +22,8 @@ if (!globalThis.TextEncoder) {
   const { TextDecoder, TextEncoder } = require('node:util');
   Object.assign(globalThis, { TextDecoder, TextEncoder });
 }
+// jsdom lays nothing out: the page is as large as its window.
+Object.defineProperties(document.documentElement, {
+  clientWidth: { configurable: true, get: () => window.innerWidth },
+  clientHeight: { configurable: true, get: () => window.innerHeight },
+});
