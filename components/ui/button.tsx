@@ -3,6 +3,7 @@ import { ActivityIndicator, Pressable, type PressableStateCallbackType, View } f
 import { line, radius, space, target } from '../theme/tokens';
 import type { ThemeColors } from '../theme/themes';
 import { useTheme } from '../theme/use-theme';
+import { focusRefused } from './focus-refused';
 import { Icon, type IconName } from './icon';
 import { Text, type TextTone } from './text';
 import { webAttributes } from './web-attributes';
@@ -43,7 +44,7 @@ type ButtonProps = {
   readonly testID?: string;
 };
 
-/** A button with a text. */
+/** A button with a text. The primary one sends nothing while a field of its form or dialog holds a refused text. */
 export function Button({
   label,
   onPress,
@@ -67,7 +68,10 @@ export function Button({
       aria-busy={busy || undefined}
       aria-expanded={expanded}
       disabled={still}
-      onPress={onPress}
+      onPress={(event) => {
+        if (variant === 'primary' && focusRefused(event.currentTarget)) return;
+        onPress?.();
+      }}
       testID={testID}
       {...webAttributes({ 'aria-describedby': describedBy })}
       style={({ pressed, hovered }: WebPressState) => ({

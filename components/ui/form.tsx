@@ -1,5 +1,6 @@
 import type { CSSProperties, ReactNode, SubmitEvent } from 'react';
 import { space } from '../theme/tokens';
+import { focusRefused } from './focus-refused';
 
 type FormProps = {
   /** What the form is for: read out on entering it. */
@@ -23,9 +24,7 @@ export function Form({ label, onSubmit, children }: FormProps) {
   const submit = (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault();
     event.stopPropagation();
-    const refused = event.currentTarget.querySelector<HTMLElement>('[data-refused]');
-    if (refused) refused.focus();
-    else onSubmit();
+    if (!focusRefused(event.currentTarget)) onSubmit();
   };
   return (
     <form aria-label={label} noValidate onSubmit={submit} style={FORM_STYLE}>

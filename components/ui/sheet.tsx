@@ -79,7 +79,7 @@ export function Sheet({
       <View
         {...drag.handlers}
         {...webAttributes({ onClick: () => drag.press() })}
-        style={webStyle({ touchAction: 'none' })}
+        style={[webStyle({ touchAction: 'none' }), { userSelect: 'none' }]}
       >
         <View
           role="slider"

@@ -8,7 +8,13 @@ import { QuantityField } from '@/components/ui/quantity-field';
 import { accessibilityProblems } from '@/tests/support/accessibility-problems';
 import { focusOn, pressKey } from '@/tests/support/press-key';
 
-function Radio({ onSend }: { readonly onSend: (power: number) => void }) {
+function Radio({
+  onSend,
+  onDiscard,
+}: {
+  readonly onSend: (power: number) => void;
+  readonly onDiscard?: () => void;
+}) {
   const [name, setName] = useState('');
   const [power, setPower] = useState(25);
   return (
@@ -22,7 +28,8 @@ function Radio({ onSend }: { readonly onSend: (power: number) => void }) {
         format={powerEntry.format}
         hint={powerEntry.hint}
       />
-      <Button label="Save" />
+      <Button label="Save" variant="primary" onPress={() => onSend(power)} />
+      <Button label="Discard" onPress={onDiscard} />
     </Form>
   );
 }
@@ -53,6 +60,22 @@ describe('a form', () => {
     expect(onSend).not.toHaveBeenCalled();
     expect(document.activeElement).toBe(power);
     expect(power.value).toBe('25 MHz');
+  });
+
+  test('is not sent by its primary button either; any other button works', () => {
+    const [onSend, onDiscard] = [jest.fn(), jest.fn()];
+    render(<Radio onSend={onSend} onDiscard={onDiscard} />);
+    const power = screen.getByLabelText<HTMLInputElement>('Power');
+    fireEvent.change(power, { target: { value: '25 MHz' } });
+    fireEvent.blur(power);
+    fireEvent.click(screen.getByRole('button', { name: 'Save' }));
+    fireEvent.click(screen.getByRole('button', { name: 'Discard' }));
+    expect([onSend.mock.calls.length, onDiscard.mock.calls.length]).toEqual([0, 1]);
+    expect(document.activeElement).toBe(power);
+    fireEvent.change(power, { target: { value: '30 W' } });
+    fireEvent.blur(power);
+    fireEvent.click(screen.getByRole('button', { name: 'Save' }));
+    expect(onSend.mock.calls).toEqual([[30]]);
   });
 
   test('leaves the focus in the field on Enter', () => {
