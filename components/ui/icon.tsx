@@ -107,7 +107,7 @@ export function Icon({ name, size = 'm', tone = 'ink' }: IconProps) {
   const stroke = color[tone];
   const pixels = iconSize[size];
   return (
-    <Svg width={pixels} height={pixels} viewBox="0 0 24 24" fill="none" aria-hidden>
+    <Svg width={pixels} height={pixels} viewBox="0 0 24 24" fill="none" aria-hidden style={{ flexShrink: 0 }}>
       {drawing.path ? (
         <Path
           d={drawing.path}

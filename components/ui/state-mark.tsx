@@ -25,7 +25,7 @@ export function StateMark({ state, size = 's' }: StateMarkProps) {
   const ink = color[tone];
   const pixels = iconSize[size];
   return (
-    <Svg width={pixels} height={pixels} viewBox="0 0 16 16" fill="none" aria-hidden>
+    <Svg width={pixels} height={pixels} viewBox="0 0 16 16" fill="none" aria-hidden style={{ flexShrink: 0 }}>
       {shape === 'diamond' ? (
         <Path
           d="M8 1.8 14.2 8 8 14.2 1.8 8z"
