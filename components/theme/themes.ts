@@ -62,7 +62,7 @@ export const themes: Readonly<Record<ThemeName, Theme>> = {
       surface: '#FCFBF6',
       obstacle: '#E7E3D6',
       hatch: '#A9A692',
-      dimension: '#66747B',
+      dimension: '#5F6D74',
       roseFill: 'rgba(14, 90, 99, 0.10)',
     },
   },

@@ -27,3 +27,5 @@ Object.defineProperties(document.documentElement, {
   clientWidth: { configurable: true, get: () => window.innerWidth },
   clientHeight: { configurable: true, get: () => window.innerHeight },
 });
+// The clock of the tests resumes after settled promises with it.
+globalThis.setImmediate ??= require('node:timers').setImmediate;
