@@ -71,7 +71,13 @@ export function ResultsPanel({
         )}
         {own.length > rows ? (
           <Button
-            label={whole ? 'Fewer pairs' : `${own.length - rows} more pairs`}
+            label={
+              whole
+                ? 'Fewer pairs'
+                : own.length === rows + 1
+                  ? '1 more pair'
+                  : `${own.length - rows} more pairs`
+            }
             variant="quiet"
             onPress={() => setWhole(!whole)}
           />

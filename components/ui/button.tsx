@@ -93,7 +93,7 @@ export function Button({
       })}
     >
       {busy ? (
-        <ActivityIndicator size="small" color={color[look.icon]} />
+        <ActivityIndicator size="small" color={color[look.icon]} aria-hidden />
       ) : icon ? (
         <Icon name={icon} tone={disabled ? 'inkSoft' : look.icon} />
       ) : null}

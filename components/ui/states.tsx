@@ -38,7 +38,7 @@ export function LoadingState({ label }: { readonly label: string }) {
   const { color } = useTheme();
   return (
     <View role="status" style={{ ...FRAME, flexDirection: 'row', alignItems: 'center' }}>
-      <ActivityIndicator size="small" color={color.action} />
+      <ActivityIndicator size="small" color={color.action} aria-hidden />
       <Text tone="soft">{label}</Text>
     </View>
   );

@@ -2,18 +2,11 @@ import fc from 'fast-check';
 import { linkKey, linksToDraw } from '@/components/canvas/links';
 import { marginText, pillText } from '@/components/canvas/margin-text';
 import { speakAntenna, worstPairOf } from '@/components/canvas/spoken-antenna';
-import type { Estimate, PairResult, PairState } from '@/shared/estimate/estimate-result';
+import type { PairResult } from '@/shared/estimate/estimate-result';
+import { buildEstimate, buildPair as pair } from '@/tests/support/build-estimate';
 import { vanRoof } from '@/tests/support/van-roof';
 
-function pair(from: string, into: string, state: PairState, marginDb: number | null): PairResult {
-  const none = { mechanism: null, frequency: null, isolationDb: marginDb === null ? null : 40 + marginDb };
-  return { from, into, state, model: 'live', ...none, neededDb: 40, marginDb, mechanisms: [], reason: null };
-}
-
-/** An estimate of these pairs; what the plan does not ask for is left out. */
-function estimateOf(...pairs: readonly PairResult[]): Estimate {
-  return { pairs, antennas: {} } as unknown as Estimate;
-}
+const estimateOf = (...pairs: readonly PairResult[]) => buildEstimate(pairs);
 
 describe('links on the plan', () => {
   test('speak for the worse of their two directions', () => {

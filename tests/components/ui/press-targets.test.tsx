@@ -18,7 +18,7 @@ describe('a button', () => {
     expect(onPress).toHaveBeenCalledTimes(2);
   });
 
-  test('does nothing while it is busy, and says so', () => {
+  test('does nothing while it is busy, and says so', async () => {
     const onPress = jest.fn();
     render(<Button label="Save" onPress={onPress} busy />);
     const button = screen.getByRole('button', { name: 'Save' });
@@ -26,6 +26,7 @@ describe('a button', () => {
     expect(onPress).not.toHaveBeenCalled();
     expect(button.getAttribute('aria-busy')).toBe('true');
     expect(button.getAttribute('aria-disabled')).toBe('true');
+    expect(await accessibilityProblems()).toEqual([]);
   });
 
   test('that is only an icon has a name', async () => {
