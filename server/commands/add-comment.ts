@@ -11,6 +11,7 @@ import type { Services } from '../services';
 import { enqueueTask } from '../tasks/enqueue-task';
 import type { CommentTarget } from '@/shared/api/comments';
 import { accept, refuse, type Result } from '@/shared/errors';
+import type { LayoutDocument } from '@/shared/layout/document';
 import { findActiveMembers, findLayoutWorkers } from './find-concerned';
 import { loadComment } from './load-comment';
 
@@ -25,12 +26,14 @@ export interface CommentPlace {
   readonly layoutId: string;
   readonly revisionId: string | null;
   readonly names: LayoutNames;
+  /** What a leader line can point at. */
+  readonly document: LayoutDocument;
 }
 
 /**
  * Adds a comment under the layout's next number, and writes to those concerned in the same transaction. The
  * number is taken while the layout's row is locked, so there is no gap. A second arrival of an identifier
- * changes nothing.
+ * changes nothing. Refused when the antenna it points at is not there.
  */
 export async function addComment(
   services: Services,
@@ -52,6 +55,11 @@ export async function addComment(
       return same
         ? accept({ comment: await reload(teamId, input.id, transaction), isNew: false })
         : refuseIdentifier();
+    }
+    if (input.target.kind === 'antenna' && !Object.hasOwn(place.document.antennas, input.target.antennaId)) {
+      return refuse('invalid', `There is no antenna ${input.target.label} here. Point at something else.`, [
+        { path: 'target.antennaId', message: 'is no antenna of this layout' },
+      ]);
     }
     const number = layout.commentCount + 1;
     await Layout.update({ commentCount: number }, { where: { id: layout.id }, silent: true, transaction });

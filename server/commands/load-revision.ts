@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { Revision } from '../models/revision';
+import { readRevisionContent, type StoredRevisionContent } from '../models/revision-content';
 
 /** A revision of a team with what happened to it, without its content; or null. */
 export function findRevision(
@@ -23,6 +24,15 @@ export async function loadRevision(teamId: string, id: string, transaction?: Tra
   const revision = await findRevision(teamId, id, transaction);
   if (revision === null) throw new Error(`revision ${id} is gone`);
   return revision;
+}
+
+/**
+ * What the canonical JSON of a revision holds.
+ * @throws Error when there is no such revision.
+ */
+export async function loadContent(id: string): Promise<StoredRevisionContent> {
+  const { content } = await Revision.findByPk(id, { attributes: ['content'], rejectOnEmpty: true });
+  return readRevisionContent(content);
 }
 
 /** A layout's revisions with what happened to them, newest first. */

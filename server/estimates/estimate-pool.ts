@@ -96,7 +96,8 @@ export class EstimatePool {
   }
 
   private startWorker(slot: Slot): Worker {
-    const worker = new Worker(this.workerFile, { execArgv: ['--import', 'tsx'] });
+    // The loader by `--require`: with `--import` a worker's own first file is not read as TypeScript.
+    const worker = new Worker(this.workerFile, { execArgv: ['--require', 'tsx/cjs'] });
     worker.on('message', (answer: EstimateAnswer) => this.take(slot, answer));
     worker.on('error', (error) => this.log.error({ err: error }, 'an estimating worker broke down'));
     worker.on('exit', (code) => this.replace(slot, worker, code));

@@ -28,7 +28,7 @@ export function limitRequests(limits: RateLimits): RequestHandler {
   return createLimiter({ windowMs: MINUTE_MS, limit: limits.requestsPerMinute, keyGenerator: readAddress });
 }
 
-/** Limits guesses at secrets: by account and address together, and by address alone. Successes do not count. */
+/** Limits guesses at secrets: by account (who is signed in, or the address typed) and address together, and by address alone. Successes do not count. */
 export function limitAttempts(limits: RateLimits): RequestHandler[] {
   return [
     createLimiter({
@@ -77,6 +77,7 @@ function readAddress(request: Request): string {
 }
 
 function readAccount(request: Request): string {
+  if (request.signedIn) return request.signedIn.person.id;
   const body: unknown = request.body;
   const email = typeof body === 'object' && body !== null && 'email' in body ? body.email : undefined;
   return typeof email === 'string' ? normalizeEmail(email).slice(0, 254) : '';

@@ -36,7 +36,8 @@ export function createJobsRouter(services: Services): Router {
       const like = { [Op.like]: `%${escapeLike(query.search)}%` };
       conditions.push({ [Op.or]: [{ name: like }, { customer: like }] });
     }
-    if (!can(actor, 'see-jobs', actor)) conditions.push({ id: await listFrozenJobIds(services, actor) });
+    const frozen = can(actor, 'see-jobs', actor) ? null : await countFrozenPlatforms(services, actor);
+    if (frozen) conditions.push({ id: [...frozen.keys()] });
     if (query.cursor !== undefined) conditions.push(readPosition(query.cursor));
     const jobs = await Job.findAll({
       where: { [Op.and]: conditions },
@@ -47,7 +48,7 @@ export function createJobsRouter(services: Services): Router {
       limit: limit + 1,
     });
     const page = jobs.slice(0, limit);
-    const counts = await countPlatforms(page.map((job) => job.id));
+    const counts = frozen ?? (await countPlatforms(page.map((job) => job.id)));
     const last = page.at(-1);
     response.json({
       items: page.map((job) => presentJob(actor, job, counts.get(job.id) ?? 0)),
@@ -139,17 +140,20 @@ async function countPlatforms(jobIds: readonly string[]): Promise<ReadonlyMap<st
   return new Map(rows.map((row) => [String(row['jobId'] ?? row['job_id']), row.count]));
 }
 
-/** Jobs that lead to a revision that was frozen. */
-async function listFrozenJobIds({ sequelize }: Services, actor: Actor): Promise<string[]> {
-  const rows = await sequelize.query<{ id: string }>(
-    `SELECT DISTINCT platforms.job_id AS id FROM revisions
+/** Jobs that lead to a revision that was frozen, each with how many of its platforms do. */
+async function countFrozenPlatforms(
+  { sequelize }: Services,
+  actor: Actor,
+): Promise<ReadonlyMap<string, number>> {
+  const rows = await sequelize.query<{ id: string; count: number }>(
+    `SELECT platforms.job_id AS id, COUNT(DISTINCT platforms.id) AS count FROM revisions
      JOIN revision_events ON revision_events.revision_id = revisions.id AND revision_events.kind = 'frozen'
      JOIN layouts ON layouts.id = revisions.layout_id
      JOIN platforms ON platforms.id = layouts.platform_id
-     WHERE revisions.team_id = ?`,
+     WHERE revisions.team_id = ? GROUP BY platforms.job_id`,
     { replacements: [actor.teamId], type: QueryTypes.SELECT },
   );
-  return rows.map((row) => row.id);
+  return new Map(rows.map((row) => [row.id, row.count]));
 }
 
 function readPosition(cursor: string): WhereOptions<Job['_attributes']> {

@@ -80,7 +80,9 @@ export function createLayoutsRouter(services: Services): Router {
     const { layout, by } = await findSeenLayout(request);
     authorize(by.actor, 'comment-on-layout', layout);
     const input = parseBody(commentRequest, request);
-    const place = { layoutId: layout.id, revisionId: null, names: namesOf(layout) };
+    // An antenna that was placed just before is among what is drained.
+    const { document } = await services.live.drainLayout(layout.id);
+    const place = { layoutId: layout.id, revisionId: null, names: namesOf(layout), document };
     const { comment, isNew } = unwrap(await addComment(services, by, place, input));
     if (isNew) {
       const present = (actor: typeof by.actor) => presentComment(actor, comment);

@@ -85,7 +85,7 @@ export function createPartsRouter(): Router {
     const part = await findPart(request, actor);
     authorize(actor, 'edit-parts', part);
     const copy = renamePart(decodePart(part.content), (name) => {
-      return `${name.slice(0, LIMITS.nameLength - COPY_SUFFIX.length)}${COPY_SUFFIX}`;
+      return `${shorten(name, LIMITS.nameLength - COPY_SUFFIX.length)}${COPY_SUFFIX}`;
     });
     const created = await Part.create({ teamId: actor.teamId, ...columnsOf(copy) });
     response.status(201).json(presentPart(actor, created));
@@ -108,6 +108,11 @@ function renamePart(content: PartContent, rename: (name: string) => string): Par
   return content.kind === 'antenna'
     ? { kind: 'antenna', antenna: { ...content.antenna, name: rename(content.antenna.name) } }
     : { kind: 'radio', radio: { ...content.radio, name: rename(content.radio.name) } };
+}
+
+// A character of two halves is kept whole or left out.
+function shorten(text: string, most: number): string {
+  return text.slice(0, most).replace(/[\ud800-\udbff]$/, '');
 }
 
 function readPosition(cursor: string): WhereOptions<Part['_attributes']> {

@@ -1,6 +1,8 @@
 import { Router, type Request } from 'express';
 import { readSignedIn, requireSignedIn } from '../auth/signed-in';
 import { createLayout } from '../commands/create-layout';
+import { touchJob } from '../commands/touch-job';
+import { transact } from '../database/transaction';
 import { authorize, refuseNotFound, unwrap } from '../middleware/refusal-error';
 import { parseBody, parseParam } from '../middleware/validate';
 import { Platform } from '../models/platform';
@@ -21,7 +23,10 @@ export function createPlatformsRouter(services: Services): Router {
     const platform = await findPlatform(request, actor);
     authorize(actor, 'edit-layouts', platform);
     const { name } = parseBody(platformChangeRequest, request);
-    await platform.update({ name });
+    await transact(services.sequelize, async (transaction) => {
+      await platform.update({ name }, { transaction });
+      await touchJob(platform.jobId, transaction);
+    });
     response.json(await describePlatform(actor, platform));
   });
 

@@ -5,7 +5,7 @@ import { readSignedIn, requireSignedIn, type SignedIn } from '../auth/signed-in'
 import { addComment } from '../commands/add-comment';
 import { freezeRevision, returnRevision, submitRevision } from '../commands/decide-revision';
 import { COMMENT_PARTS } from '../commands/load-comment';
-import { findRevision, listRevisions } from '../commands/load-revision';
+import { findRevision, listRevisions, loadContent } from '../commands/load-revision';
 import { limitAttempts } from '../middleware/limit-rate';
 import { authorize, refuseNotFound, refuseRequest, unwrap } from '../middleware/refusal-error';
 import { parseBody, parseParam, parseQuery } from '../middleware/validate';
@@ -121,7 +121,8 @@ export function createRevisionsRouter(services: Services): Router {
     authorize(by.actor, 'comment-on-revision', revisionRecord(revision));
     const input = parseBody(commentRequest, request);
     const names = { job: revision.jobName, platform: revision.platformName, layout: revision.layoutName };
-    const place = { layoutId: revision.layoutId, revisionId: revision.id, names };
+    const { document } = await loadContent(revision.id);
+    const place = { layoutId: revision.layoutId, revisionId: revision.id, names, document };
     const { comment, isNew } = unwrap(await addComment(services, by, place, input));
     const present = (actor: Actor) => presentComment(actor, comment);
     if (isNew) services.live.announce({ kind: 'comment', layoutId: revision.layoutId, present });

@@ -4,25 +4,26 @@ import { LIMITS } from '../layout/limits';
 
 /** Fields that many requests and responses share. */
 
+// A surrogate without its other half has no UTF-8 form, so it would come back from the database as something else.
+const WHOLE_CHARACTERS = /^\P{Surrogate}*$/u;
+// eslint-disable-next-line no-control-regex -- control characters are exactly what is refused
+const CONTROLS = /[\u0000-\u001f\u007f]/;
+// eslint-disable-next-line no-control-regex -- control characters are exactly what is refused
+const CONTROLS_BUT_BREAKS = /[\u0000-\u0009\u000b-\u001f\u007f]/;
+
 export const idField = z.string().regex(ID_PATTERN, 'is not an identifier');
 
-/** A name as people type it: trimmed, without control characters. */
-export const nameField = z
-  .string()
-  .trim()
-  .min(1, 'is empty')
-  .max(LIMITS.nameLength, `is longer than ${LIMITS.nameLength} characters`)
-  // eslint-disable-next-line no-control-regex -- control characters are exactly what is refused
-  .regex(/^[^\u0000-\u001f\u007f]*$/, 'holds a control character');
+/** A name as people type it: trimmed, on one line. */
+export const nameField = textField(LIMITS.nameLength, CONTROLS).min(1, 'is empty');
+
+/** Like a name, but it may be left empty. */
+export const optionalNameField = textField(LIMITS.nameLength, CONTROLS);
 
 /** A longer text: line breaks allowed, other control characters not. */
-export const noteField = z
-  .string()
-  .trim()
-  .min(1, 'is empty')
-  .max(LIMITS.noteLength, `is longer than ${LIMITS.noteLength} characters`)
-  // eslint-disable-next-line no-control-regex -- control characters are exactly what is refused
-  .regex(/^[^\u0000-\u0009\u000b-\u001f\u007f]*$/, 'holds a control character');
+export const noteField = textField(LIMITS.noteLength, CONTROLS_BUT_BREAKS).min(1, 'is empty');
+
+/** Like a longer text, but it may be left empty. */
+export const optionalNoteField = textField(LIMITS.noteLength, CONTROLS_BUT_BREAKS);
 
 export const emailField = z
   .string()
@@ -61,7 +62,8 @@ export const rolesField = z
 
 /** Query of a list that comes in pages. */
 export const pageQuery = z.strictObject({
-  cursor: z.string().max(200).optional(),
+  // Holds an order key, which may be a name of the greatest length in its longest encoding.
+  cursor: z.string().max(1000).optional(),
   limit: z.coerce.number().int().min(1).max(100).optional(),
 });
 
@@ -73,4 +75,13 @@ export function pageOf<T extends z.ZodType>(item: T) {
 /** What this member may do to a resource. */
 export function abilitiesOf<const A extends string>(actions: readonly A[]) {
   return z.strictObject(Object.fromEntries(actions.map((a) => [a, z.boolean()])) as Record<A, z.ZodBoolean>);
+}
+
+function textField(most: number, refused: RegExp) {
+  return z
+    .string()
+    .trim()
+    .max(most, `is longer than ${most} characters`)
+    .refine((text) => !refused.test(text), 'holds a control character')
+    .regex(WHOLE_CHARACTERS, 'holds half a character');
 }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { abilitiesOf, idField, nameField, pageOf, pageQuery, timeField } from './fields';
+import { abilitiesOf, idField, nameField, optionalNameField, pageOf, pageQuery, timeField } from './fields';
 
 /** Names of a revision's states. */
 export const REVISION_STATES = ['saved', 'in review', 'returned', 'frozen', 'superseded'] as const;
@@ -54,13 +54,13 @@ export type JobDetail = z.infer<typeof jobDetailSchema>;
 /** POST /api/jobs */
 export const jobRequest = z.strictObject({
   name: nameField,
-  customer: z.string().trim().max(120).default(''),
+  customer: optionalNameField.default(''),
 });
 
 /** PATCH /api/jobs/:id */
 export const jobChangeRequest = z.strictObject({
   name: nameField.optional(),
-  customer: z.string().trim().max(120).optional(),
+  customer: optionalNameField.optional(),
   archived: z.boolean().optional(),
 });
 

@@ -1,6 +1,14 @@
 import { z } from 'zod';
 import { layoutDocumentSchema } from '../layout/schema';
-import { abilitiesOf, enteredPasswordField, idField, noteField, pageOf, timeField } from './fields';
+import {
+  abilitiesOf,
+  enteredPasswordField,
+  idField,
+  noteField,
+  optionalNoteField,
+  pageOf,
+  timeField,
+} from './fields';
 import { revisionStateField } from './jobs';
 import { estimateField } from './layouts';
 
@@ -57,7 +65,7 @@ export type FrozenRevision = z.infer<typeof frozenRevisionSchema>;
 export const frozenRevisionListSchema = pageOf(frozenRevisionSchema);
 
 /** POST /api/layouts/:id/revisions (201): saves what the server holds as the next letter. */
-export const saveRevisionRequest = z.strictObject({ note: z.string().trim().max(1000).default('') });
+export const saveRevisionRequest = z.strictObject({ note: optionalNoteField.default('') });
 
 /** POST /api/revisions/:id/submit has no body. POST /api/revisions/:id/return */
 export const returnRevisionRequest = z.strictObject({ reason: noteField });
