@@ -26,6 +26,12 @@ function issuesOf(result: {
   return (result.error?.issues ?? []).map(({ path, message }) => [path.join('.'), message]);
 }
 
+/** So many objects by their identifiers. */
+function many<T>(count: number, build: (id: string) => T): Record<string, T> {
+  const ids = Array.from({ length: count }, (_, index) => idOf(`many ${index}`));
+  return Object.fromEntries(ids.map((id) => [id, build(id)]));
+}
+
 describe('the schema of a document', () => {
   test('takes every document that holds, as it is', () => {
     fc.assert(
@@ -100,28 +106,42 @@ describe('the schema of a document', () => {
     expect(issuesOf(layoutDocumentSchema.safeParse(document))).toContainEqual([path, message]);
   });
 
-  test('refuses more antennas than a layout may hold, and a document of more than a megabyte', () => {
-    const whips = Array.from({ length: LIMITS.antennas + 1 }, (_, index) =>
-      whipAt(1, 0, { id: idOf(`w${index}`) }),
-    );
-    const antennas = Object.fromEntries(whips.map((whip) => [whip.id, whip]));
-    expect(issuesOf(layoutDocumentSchema.safeParse({ ...BARE_ROOF, antennas }))).toContainEqual([
-      'antennas',
-      'holds more than 64',
+  test('refuses more antennas than a layout may hold', () => {
+    const whips = many(LIMITS.antennas + 1, (id) => whipAt(1, 0, { id }));
+    expect(issuesOf(layoutDocumentSchema.safeParse({ ...BARE_ROOF, antennas: whips }))).toEqual([
+      ['antennas', 'holds more than 64'],
     ]);
-    const element = whipAt(0, 0).part.elements[0]!;
-    const elements = Array.from({ length: LIMITS.elementsPerPart }, (_, index) => ({
-      ...element,
-      id: idOf(`e${index}`),
-    }));
-    const heavy = whips
-      .slice(0, LIMITS.antennas)
-      .map((whip) => ({ ...whip, part: { name: '天'.repeat(120), elements } }));
-    const text = JSON.stringify(heavy);
-    const large = { ...BARE_ROOF, antennas: Object.fromEntries(heavy.map((whip) => [whip.id, whip])) };
-    expect(layoutDocumentSchema.safeParse(large).success).toBe(
-      Buffer.byteLength(text) < LIMITS.documentBytes,
-    );
+  });
+
+  test('refuses a document of more than a megabyte that keeps every other limit', () => {
+    const longName = '天'.repeat(LIMITS.nameLength);
+    const outline = BARE_ROOF.platform.outline;
+    const declared = (id: string) => ({
+      id,
+      kind: 'declared' as const,
+      form: longName,
+      gainDbi: 0,
+      polarisation: 'vertical' as const,
+      band: { from: 1e8, to: 2e8 },
+      offset: { x: 0, y: 0, z: 0 },
+    });
+    const part = { name: longName, elements: Object.values(many(LIMITS.elementsPerPart, declared)) };
+    const large = {
+      ...BARE_ROOF,
+      antennas: many(LIMITS.antennas, (id) => whipAt(1, 0, { id, name: longName, part })),
+      keepOuts: many(LIMITS.keepOuts, (id) => ({ id, name: longName, outline, reason: longName })),
+      obstacles: many(LIMITS.obstacles, (id) => ({
+        id,
+        name: longName,
+        outline,
+        base: 0,
+        height: 1,
+        metal: true,
+      })),
+      mountPoints: many(LIMITS.mountPoints, (id) => ({ id, name: longName, x: 0, y: 0 })),
+      radios: many(LIMITS.radios, (id) => ({ ...plainRadio('radio'), id, name: longName })),
+    };
+    expect(issuesOf(layoutDocumentSchema.safeParse(large))).toEqual([['', 'is larger than 1 MB']]);
   });
 
   test('survives anything that JSON can hold', () => {
