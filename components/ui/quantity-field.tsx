@@ -48,19 +48,24 @@ export function QuantityField({
   const current = edit?.problem != null && edit.shownThen !== shown ? null : edit;
   const draft = current?.text ?? null;
 
+  /** Takes a text over, or leaves it standing with what is wrong with it. */
+  const take = (text: string) => {
+    const reading = read(text);
+    if (!reading.ok) {
+      setEdit({ text, problem: reading.message, shownThen: shown });
+      return;
+    }
+    setEdit(null);
+    onCommit(reading.value);
+  };
+
   const finish = () => {
     if (draft === null) return;
     if (draft.trim() === shown) {
       setEdit(null);
       return;
     }
-    const reading = read(draft);
-    if (!reading.ok) {
-      setEdit({ text: draft, problem: reading.message, shownThen: shown });
-      return;
-    }
-    setEdit(null);
-    onCommit(reading.value);
+    take(draft);
   };
 
   const reading = draft !== null && draft.trim() !== '' ? read(draft) : null;
@@ -80,7 +85,8 @@ export function QuantityField({
           const sign = event.key === 'ArrowUp' ? 1 : event.key === 'ArrowDown' ? -1 : 0;
           if (sign === 0) return;
           event.preventDefault();
-          onCommit(value + sign * step * (event.shiftKey ? 10 : 1));
+          // As if the next number had been typed: clean of rounding, and held to the same bounds.
+          take(format(value + sign * step * (event.shiftKey ? 10 : 1)));
         }
       }}
       hint={hint}

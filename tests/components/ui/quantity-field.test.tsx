@@ -1,6 +1,6 @@
 import { fireEvent, render, screen } from '@testing-library/react';
 import { useState } from 'react';
-import { frequencyEntry, lengthEntry } from '@/components/panels/quantity-entries';
+import { decibelEntry, frequencyEntry, lengthEntry } from '@/components/panels/quantity-entries';
 import { QuantityField } from '@/components/ui/quantity-field';
 import { accessibilityProblems } from '@/tests/support/accessibility-problems';
 import { focusOn, pressKey } from '@/tests/support/press-key';
@@ -105,11 +105,35 @@ describe('a field for a quantity', () => {
     const { commits, field, type } = openWidth({ step: 0.01 });
     pressKey('ArrowUp');
     pressKey('ArrowDown', { shiftKey: true });
-    expect(commits.map((value) => Number(value.toFixed(9)))).toEqual([1.26, 1.16]);
+    expect(commits).toEqual([1.26, 1.16]);
     type('7');
     pressKey('ArrowUp');
     expect(commits).toHaveLength(2);
     expect(field.value).toBe('7');
+  });
+
+  test('holds a step to the bounds of what is typed, and says so in place', () => {
+    const onCommit = jest.fn();
+    render(
+      <QuantityField
+        label="Loss"
+        value={0.05}
+        onCommit={onCommit}
+        read={(text) => {
+          const reading = decibelEntry.read(text);
+          return reading.ok && reading.value < 0 ? { ok: false, message: 'From 0 dB.' } : reading;
+        }}
+        format={decibelEntry.format}
+        step={0.1}
+      />,
+    );
+    const field = screen.getByLabelText<HTMLInputElement>('Loss');
+    focusOn(field);
+    pressKey('ArrowDown');
+    expect(onCommit).not.toHaveBeenCalled();
+    expect([field.value, description(field)]).toEqual(['−0.05 dB', 'From 0 dB.']);
+    pressKey('Escape');
+    expect(field.value).toBe('0.05 dB');
   });
 
   test('an empty field asks for an example, an untouched empty one for nothing', () => {
