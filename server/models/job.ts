@@ -28,7 +28,7 @@ export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job
         teamId: idColumn(),
         name: { type: DataTypes.STRING(120), allowNull: false },
         customer: { type: DataTypes.STRING(120), allowNull: false },
-        archivedAt: { type: DataTypes.DATE(3), allowNull: true },
+        archivedAt: { type: DataTypes.DATE(3), allowNull: true, defaultValue: null },
         createdAt: DataTypes.DATE(3),
         updatedAt: DataTypes.DATE(3),
       },

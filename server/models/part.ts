@@ -32,7 +32,7 @@ export class Part extends Model<InferAttributes<Part>, InferCreationAttributes<P
         kind: { type: DataTypes.STRING(20), allowNull: false },
         name: { type: DataTypes.STRING(120), allowNull: false },
         content: { type: DataTypes.TEXT('long'), allowNull: false },
-        archivedAt: { type: DataTypes.DATE(3), allowNull: true },
+        archivedAt: { type: DataTypes.DATE(3), allowNull: true, defaultValue: null },
         createdAt: DataTypes.DATE(3),
         updatedAt: DataTypes.DATE(3),
       },

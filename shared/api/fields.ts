@@ -6,9 +6,7 @@ import { LIMITS } from '../layout/limits';
 
 // A surrogate without its other half has no UTF-8 form, so it would come back from the database as something else.
 const WHOLE_CHARACTERS = /^\P{Surrogate}*$/u;
-// eslint-disable-next-line no-control-regex -- control characters are exactly what is refused
 const CONTROLS = /[\u0000-\u001f\u007f]/;
-// eslint-disable-next-line no-control-regex -- control characters are exactly what is refused
 const CONTROLS_BUT_BREAKS = /[\u0000-\u0009\u000b-\u001f\u007f]/;
 
 export const idField = z.string().regex(ID_PATTERN, 'is not an identifier');
