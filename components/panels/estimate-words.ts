@@ -29,10 +29,10 @@ export const MECHANISM_WORDS: Readonly<Record<Mechanism, string>> = {
 export function worstPair(estimate: Estimate): PairResult | null {
   let worst: PairResult | null = null;
   for (const pair of estimate.pairs) {
-    if (pair.state === 'never together') continue;
+    if (pair.state === 'never together' || pair.state === 'not held') continue;
     if (worst === null || isWorse(pair, worst)) worst = pair;
   }
-  return worst;
+  return worst ?? estimate.pairs.find(({ state }) => state === 'not held') ?? null;
 }
 
 /** What the estimate comes to, in one sentence. */
@@ -44,7 +44,14 @@ export function headlineOf(estimate: Estimate | null, labelOf: LabelOf): Headlin
       estimate.pairs.length > 0 ? 'No pair needs to be judged' : 'Two radios on the plan make the first pair';
     return { state: null, sentence, pair: null };
   }
-  return { state: pair.state, sentence: pairSentence(pair, labelOf), pair };
+  const sentence = pairSentence(pair, labelOf);
+  // What no model holds is not clear: the counts below say how many those are.
+  const open = pair.state === 'clear' && estimate.counts['not held'] > 0;
+  return {
+    state: pair.state,
+    sentence: open ? sentence.replace('All clear', 'Clear where held') : sentence,
+    pair,
+  };
 }
 
 /** A pair in one sentence: "A2 into A3 lacks 8 dB". */

@@ -33,6 +33,17 @@ describe('the one sentence that matters', () => {
     expect(headlineOf(buildEstimate(pairs), labelOf).sentence).toBe('B into C lacks 4 dB');
   });
 
+  test('speaks of what is judged before what no model holds, and does not call that clear', () => {
+    const open = buildPair('a', 'b', 'not held', null, { reason: REASON });
+    const sentenceOf = (...pairs: Parameters<typeof buildEstimate>[0]) =>
+      headlineOf(buildEstimate(pairs), labelOf).sentence;
+    expect(sentenceOf(open, buildPair('a', 'c', 'tight', 5))).toBe('A into C is tight, 5 dB left');
+    expect(sentenceOf(open, buildPair('a', 'c', 'clear', 21))).toBe(
+      'Clear where held, A into C has 21 dB left',
+    );
+    expect(sentenceOf(open)).toBe('A into B is not held');
+  });
+
   test('says what is missing where there is nothing to judge', () => {
     expect(headlineOf(null, labelOf)).toEqual({
       state: null,
