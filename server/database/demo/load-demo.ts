@@ -6,6 +6,8 @@ import { Person } from '../../models/person';
 import { Team } from '../../models/team';
 import { transact } from '../transaction';
 import { DEMO_PEOPLE, DEMO_TEAM } from './demo-accounts';
+import type { DemoContext } from './demo-context';
+import { loadDemoComments } from './load-demo-comments';
 import { loadDemoJobs } from './load-demo-jobs';
 
 /**
@@ -32,7 +34,7 @@ export async function loadDemo(sequelize: Sequelize, sessionSecret: string): Pro
         await Membership.create({ teamId: team.id, personId: person.id, roles }, { transaction }),
       );
     }
-    await loadDemoJobs({
+    const context: DemoContext = {
       team,
       member: (email) => {
         const membership = memberships.get(email);
@@ -40,7 +42,9 @@ export async function loadDemo(sequelize: Sequelize, sessionSecret: string): Pro
         return membership;
       },
       transaction,
-    });
+    };
+    await loadDemoJobs(context);
+    await loadDemoComments(context);
   });
   return true;
 }
