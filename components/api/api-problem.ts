@@ -36,6 +36,14 @@ export function describeError(error: unknown): string {
   return 'Something went wrong in this page. Load it again; what you typed is kept.';
 }
 
+/** One sentence about what stopped a whole page: a piece of it that did not arrive, or a fault of ours. */
+export function describePageError(error: unknown): string {
+  if (error instanceof Error && /load|fetch|chunk/i.test(error.message) && !(error instanceof TypeError)) {
+    return 'A piece of it did not arrive: the connection is gone, or the server has a newer one. What you typed is kept.';
+  }
+  return describeError(error);
+}
+
 /** The server's problems by field: the path without its leading `body.`, and what is wrong there. */
 export function fieldProblems(error: unknown): readonly Problem[] {
   return error instanceof ApiProblem ? error.problems.filter((problem) => problem.path !== '') : [];

@@ -19,7 +19,7 @@ export const SESSION_KEY = ['session'] as const;
 type SessionState =
   | { readonly status: 'loading' }
   | { readonly status: 'unreachable'; readonly error: Error; readonly retry: () => void }
-  | { readonly status: 'signed-out' }
+  | { readonly status: 'signed-out'; /** Somebody signed out in this page. */ readonly left: boolean }
   | { readonly status: 'signed-in'; readonly session: Session };
 
 type SessionValue = {
@@ -41,6 +41,7 @@ export function SessionProvider({ children }: { readonly children: ReactNode }) 
   const client = useQueryClient();
   const query = useQuery({ queryKey: SESSION_KEY, queryFn: fetchSession, staleTime: Infinity });
   const [expired, setExpired] = useState(false);
+  const [left, setLeft] = useState(false);
   const waiting = useRef<((renewed: boolean) => void)[]>([]);
   const session = query.data ?? null;
   const personId = session?.person.id ?? null;
@@ -70,6 +71,7 @@ export function SessionProvider({ children }: { readonly children: ReactNode }) 
       if (!same || !expired)
         client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== SESSION_KEY[0] });
       client.setQueryData(SESSION_KEY, next);
+      setLeft(false);
       settle(same);
     },
     [client, expired, personId, settle],
@@ -79,6 +81,7 @@ export function SessionProvider({ children }: { readonly children: ReactNode }) 
     settle(false);
     client.clear();
     client.setQueryData(SESSION_KEY, null);
+    setLeft(true);
   }, [client, settle]);
 
   const { isPending, error, refetch } = query;
@@ -90,13 +93,13 @@ export function SessionProvider({ children }: { readonly children: ReactNode }) 
           ? { status: 'loading' }
           : error
             ? { status: 'unreachable', error, retry: () => void refetch() }
-            : { status: 'signed-out' },
+            : { status: 'signed-out', left },
       expired,
       enter,
       leave,
       dismissRenewal: () => settle(false),
     }),
-    [session, isPending, error, refetch, expired, enter, leave, settle],
+    [session, isPending, error, refetch, expired, left, enter, leave, settle],
   );
   return <SessionContext value={value}>{children}</SessionContext>;
 }

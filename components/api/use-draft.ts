@@ -1,6 +1,6 @@
 import { del, get, set } from 'idb-keyval';
 import { useCallback, useEffect, useRef, useState } from 'react';
-import { useSession } from './session-provider';
+import { useSessionState } from './session-provider';
 
 const WRITE_AFTER_MS = 250;
 
@@ -17,18 +17,21 @@ export type Draft<T> = {
 
 /**
  * Keeps a half-filled form in the browser so that it survives a reload; bound to the member, so that nobody else at
- * the same browser sees it. `read` makes sure that what was kept still fits the form.
+ * the same browser sees it (before anybody is signed in, to nobody). `read` makes sure that what was kept still
+ * fits the form. Without a name nothing is kept.
  */
-export function useDraft<T>(name: string, read: (kept: unknown) => T | null): Draft<T> {
-  const { member } = useSession();
-  const key = `draft:${member.id}:${name}`;
-  const [state, setState] = useState<{ key: string; kept: T | null } | null>(null);
+export function useDraft<T>(name: string | null, read: (kept: unknown) => T | null): Draft<T> {
+  const { state: session } = useSessionState();
+  const owner = session.status === 'signed-in' ? session.session.member.id : 'nobody';
+  const key = name === null ? null : `draft:${owner}:${name}`;
+  const [state, setState] = useState<{ key: string | null; kept: T | null } | null>(null);
   const timer = useRef<ReturnType<typeof setTimeout> | null>(null);
   const waiting = useRef<{ key: string; value: T } | null>(null);
   const reader = useRef(read);
 
   useEffect(() => {
     let current = true;
+    if (key === null) return;
     const settle = (kept: T | null) => {
       if (current) setState({ key, kept });
     };
@@ -60,6 +63,7 @@ export function useDraft<T>(name: string, read: (kept: unknown) => T | null): Dr
 
   const keep = useCallback(
     (value: T) => {
+      if (key === null) return;
       waiting.current = { key, value };
       timer.current ??= setTimeout(flush, WRITE_AFTER_MS);
     },
@@ -68,11 +72,12 @@ export function useDraft<T>(name: string, read: (kept: unknown) => T | null): Dr
 
   const discard = useCallback(() => {
     waiting.current = null;
+    if (key === null) return;
     del(key).catch(ignoreForbiddenStorage);
   }, [key]);
 
-  const settled = state?.key === key ? state : null;
-  return { ready: settled !== null, kept: settled?.kept ?? null, keep, discard };
+  const settled = key !== null && state?.key === key ? state : null;
+  return { ready: key === null || settled !== null, kept: settled?.kept ?? null, keep, discard };
 }
 
 function ignoreForbiddenStorage(error: unknown): void {

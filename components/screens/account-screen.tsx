@@ -103,6 +103,7 @@ function NameForm() {
     schema: accountRequest,
     bodyOf: (values) => values,
     sender: change,
+    draft: { name: 'account-name', fields: ['name'] },
   });
   return (
     <Form label="Name" onSubmit={form.submit}>

@@ -17,6 +17,8 @@ import { RenewalDialog } from './renewal-dialog';
 const DOORS = ['/sign-in', '/setup', '/forgotten'];
 /** Links of mails: shown to everybody. */
 const LINKS = ['/invitation/', '/password/'];
+/** Not for those who only build from frozen revisions. */
+const OF_JOBS = /^\/(jobs|parts)(\/|$)/;
 
 /** What every screen stands in: theme, session, the server's answers, and who may see what. */
 export function AppRoot({ children }: { readonly children: ReactNode }) {
@@ -45,8 +47,9 @@ function Ground({ children }: { readonly children: ReactNode }) {
 function Doorkeeper({ children }: { readonly children: ReactNode }) {
   const { state } = useSessionState();
   const path = usePathname();
+  const { search } = globalThis.location;
   const { next } = useGlobalSearchParams<{ next?: string }>();
-  if (LINKS.some((link) => path.startsWith(link)) && state.status !== 'signed-in') return children;
+  if (LINKS.some((link) => path.startsWith(link)) && state.status !== 'loading') return children;
   switch (state.status) {
     case 'loading':
       return (
@@ -66,10 +69,20 @@ function Doorkeeper({ children }: { readonly children: ReactNode }) {
       );
     case 'signed-out':
       if (DOORS.includes(path)) return children;
-      return <Redirect href={path === '/' ? '/sign-in' : `/sign-in?next=${encodeURIComponent(path)}`} />;
+      // Whoever signed out meant to leave: the next one begins at the start.
+      return (
+        <Redirect
+          href={
+            path === '/' || state.left
+              ? '/sign-in'
+              : `/sign-in?next=${encodeURIComponent(`${path}${search}`)}`
+          }
+        />
+      );
     case 'signed-in': {
-      const isDoor = path === '/' || DOORS.includes(path) || path.startsWith('/invitation/');
-      if (!isDoor) return children;
+      const { seeJobs } = state.session.abilities;
+      if (!seeJobs && OF_JOBS.test(path)) return <Redirect href={homeOf(state.session)} />;
+      if (path !== '/' && !DOORS.includes(path)) return children;
       return (
         <Redirect
           href={next?.startsWith('/') && !next.startsWith('//') ? (next as Href) : homeOf(state.session)}

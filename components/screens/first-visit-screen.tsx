@@ -17,6 +17,7 @@ export function FirstVisitScreen() {
     schema: firstVisitRequest,
     bodyOf: (values) => values,
     sender: useFirstVisit(),
+    draft: { name: 'first-visit', fields: ['team', 'name', 'email'] },
   });
   if (setup.data?.state === 'ready') return <Redirect href="/sign-in" />;
   return (

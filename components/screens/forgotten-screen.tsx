@@ -41,7 +41,7 @@ export function ForgottenScreen() {
           <Button label="Send the link" variant="primary" onPress={form.submit} busy={form.busy} wide />
         </Form>
       )}
-      <Link href="/sign-in" label="Back to signing in" />
+      <Link alone href="/sign-in" label="Back to signing in" />
     </DoorFrame>
   );
 }

@@ -1,4 +1,6 @@
+import { useRouter } from 'expo-router';
 import { describeError } from '@/components/api/api-problem';
+import { useSessionState } from '@/components/api/session-provider';
 import { useAcceptInvitation, useInvitationToken } from '@/components/api/use-account';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
@@ -26,7 +28,7 @@ export function InvitationScreen({ token }: { readonly token: string }) {
         <LoadingState label="Looking at the invitation" />
       ) : invitation.isError ? (
         <ErrorState title="This invitation does not hold" text={describeError(invitation.error)}>
-          <Link href="/sign-in" label="Sign in" />
+          <Link alone href="/sign-in" label="Sign in" />
         </ErrorState>
       ) : (
         <AcceptForm token={token} invitation={invitation.data} />
@@ -40,15 +42,25 @@ type AcceptFormProps = {
   readonly invitation: z.infer<typeof invitationTokenSchema>;
 };
 
-function AcceptForm({ token, invitation: { hasAccount } }: AcceptFormProps) {
+function AcceptForm({ token, invitation: { email, hasAccount } }: AcceptFormProps) {
+  const router = useRouter();
+  const { state } = useSessionState();
   const form = useScreenForm({
     initial: { name: '', password: '' },
     schema: acceptInvitationRequest,
     bodyOf: ({ name, password }) => (hasAccount ? { token, password } : { token, name, password }),
     sender: useAcceptInvitation(),
+    onDone: () => router.replace('/'),
+    draft: { name: 'accept-invitation', fields: ['name'] },
   });
   return (
     <Form label="Accept the invitation" onSubmit={form.submit}>
+      {state.status === 'signed-in' && state.session.person.email !== email ? (
+        <Notice
+          kind="info"
+          text={`You are signed in as ${state.session.person.name}. Joining ends that session in this browser.`}
+        />
+      ) : null}
       {hasAccount ? null : (
         <Field
           label="Your name"

@@ -17,6 +17,7 @@ export function InviteDialog({ onClose }: { readonly onClose: () => void }) {
     bodyOf: ({ email, roles }) => ({ email, roles: [...roles] }),
     sender: useInvite(),
     onDone: onClose,
+    draft: { name: 'invite', fields: ['email', 'roles'] },
   });
   return (
     <Dialog

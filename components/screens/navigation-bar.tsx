@@ -39,7 +39,7 @@ export function TopBar() {
       {phone ? null : <Places />}
       <View style={{ flex: 1, alignItems: 'flex-end' }}>
         <Text variant="small" tone="soft" numberOfLines={1}>
-          {phone ? session.team.name : `${session.person.name}, ${session.team.name}`}
+          {phone ? session.person.name : `${session.person.name}, ${session.team.name}`}
         </Text>
       </View>
     </View>

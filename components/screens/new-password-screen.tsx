@@ -30,7 +30,7 @@ export function NewPasswordScreen({ token }: { readonly token: string }) {
         <LoadingState label="Looking at the link" />
       ) : holder.isError ? (
         <ErrorState title="This link does not hold" text={describeError(holder.error)}>
-          <Link href="/forgotten" label="Ask for a new link" />
+          <Link alone href="/forgotten" label="Ask for a new link" />
         </ErrorState>
       ) : (
         <NewPasswordForm token={token} onDone={() => setDone(true)} />

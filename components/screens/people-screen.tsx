@@ -3,7 +3,8 @@ import { View } from 'react-native';
 import { describeError } from '@/components/api/api-problem';
 import { useSession } from '@/components/api/session-provider';
 import { useMembers } from '@/components/api/use-people';
-import { line, space } from '@/components/theme/tokens';
+import { line, space, target } from '@/components/theme/tokens';
+import { useSizeClass } from '@/components/theme/use-size-class';
 import { useTheme } from '@/components/theme/use-theme';
 import { Button } from '@/components/ui/button';
 import { Chip } from '@/components/ui/state-mark';
@@ -56,6 +57,7 @@ export function PeopleScreen() {
 
 function MemberLine({ member, onChange }: { readonly member: Member; readonly onChange: () => void }) {
   const { color } = useTheme();
+  const phone = useSizeClass() === 'phone';
   const { name, email, roles, active, isYou, abilities } = member;
   const canChange = abilities.changeRoles || abilities.deactivate;
   return (
@@ -70,16 +72,34 @@ function MemberLine({ member, onChange }: { readonly member: Member; readonly on
         borderColor: color.rule,
       }}
     >
-      <View style={{ flex: 1, gap: space.hair }}>
-        <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', gap: space.s }}>
+      <View
+        style={{
+          flex: 1,
+          minHeight: target.min,
+          flexDirection: phone ? 'column' : 'row',
+          alignItems: phone ? 'stretch' : 'center',
+          gap: phone ? space.hair : space.l,
+        }}
+      >
+        <View
+          style={{
+            flex: phone ? undefined : 1,
+            flexDirection: 'row',
+            flexWrap: 'wrap',
+            alignItems: 'center',
+            gap: space.s,
+          }}
+        >
           <Text variant="strong" tone={active ? 'ink' : 'soft'}>
             {name}
           </Text>
           {isYou ? <Chip text="you" /> : null}
           {active ? null : <Chip text="deactivated" />}
         </View>
-        <Text variant="small">{rolesText(roles)}</Text>
-        <Text variant="small" tone="soft" selectable>
+        <Text variant="small" style={phone ? undefined : { flex: 1 }}>
+          {rolesText(roles)}
+        </Text>
+        <Text variant="small" tone="soft" selectable style={phone ? undefined : { flex: 1 }}>
           {email}
         </Text>
       </View>

@@ -1,6 +1,7 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import type { z } from 'zod';
 import { describeError, fieldProblems } from '@/components/api/api-problem';
+import { useDraft } from '@/components/api/use-draft';
 
 type Values = Readonly<Record<string, unknown>>;
 
@@ -31,11 +32,23 @@ export function useScreenForm<V extends Values, S extends z.ZodType>(options: {
   readonly bodyOf: (values: V) => z.input<S>;
   readonly sender: Sender<z.input<S>>;
   readonly onDone?: () => void;
+  /** Fields that survive a reload under this name; never a secret. */
+  readonly draft?: { readonly name: string; readonly fields: readonly (keyof V & string)[] };
 }): ScreenForm<V> {
-  const { initial, schema, bodyOf, sender, onDone } = options;
-  const [values, setValues] = useState(initial);
+  const { initial, schema, bodyOf, sender, onDone, draft } = options;
+  const { kept, keep, discard } = useDraft(draft?.name ?? null, (found) =>
+    fittingFields(found, initial, draft?.fields ?? []),
+  );
+  const [typed, setTyped] = useState<V | null>(null);
+  const values = typed ?? { ...initial, ...kept };
+  const [refusals, setRefusals] = useState(0);
   const [problems, setProblems] = useState<ReadonlyMap<string, string>>(new Map());
   const [error, setError] = useState<string | null>(null);
+
+  // Whoever was refused stands in the first field to mend.
+  useEffect(() => {
+    if (refusals > 0) document.querySelector<HTMLElement>('[aria-invalid="true"]')?.focus();
+  }, [refusals]);
 
   const send = async () => {
     const parsed = schema.safeParse(bodyOf(values));
@@ -43,6 +56,7 @@ export function useScreenForm<V extends Values, S extends z.ZodType>(options: {
     setProblems(new Map());
     if (!parsed.success) {
       setProblems(firstByField(parsed.error.issues.map(({ path, message }) => [String(path[0]), message])));
+      setRefusals((count) => count + 1);
       return;
     }
     try {
@@ -51,25 +65,51 @@ export function useScreenForm<V extends Values, S extends z.ZodType>(options: {
       const found = fieldProblems(refusal).map(({ path, message }) => [fieldOf(path), message] as const);
       setProblems(firstByField(found));
       if (found.length === 0) setError(describeError(refusal));
+      else setRefusals((count) => count + 1);
       return;
     }
+    discard();
     onDone?.();
   };
 
   return {
     values,
     set: (field, value) => {
-      setValues((before) => ({ ...before, [field]: value }));
+      const next = { ...values, [field]: value };
+      setTyped((before) => ({ ...(before ?? values), [field]: value }));
+      if (draft) keep(fittingFields(next, initial, draft.fields) ?? {});
       setProblems((before) => new Map([...before].filter(([name]) => name !== field)));
     },
     errorOf: (field) => {
       const message = problems.get(field);
-      return message === undefined ? undefined : `${message.charAt(0).toUpperCase()}${message.slice(1)}.`;
+      return message === undefined ? undefined : sentenceOf(message);
     },
     error,
     busy: sender.isPending,
     submit: () => void send(),
   };
+}
+
+/** Of what was kept, the fields that still fit the form; null when none does. */
+function fittingFields<V extends Values>(
+  kept: unknown,
+  initial: V,
+  fields: readonly (keyof V & string)[],
+): Partial<V> | null {
+  if (typeof kept !== 'object' || kept === null) return null;
+  const found: Values = { ...kept };
+  const fitting = fields.filter((field) => {
+    const [now, then] = [initial[field], found[field]];
+    return Array.isArray(now) ? Array.isArray(then) : typeof then === typeof now;
+  });
+  if (fitting.length === 0) return null;
+  return Object.fromEntries(fitting.map((field) => [field, found[field]])) as Partial<V>;
+}
+
+/** `is empty` and `needs at least one role` as sentences. */
+function sentenceOf(message: string): string {
+  const text = message.startsWith('is ') ? `this ${message}` : message;
+  return `${text.charAt(0).toUpperCase()}${text.slice(1)}.`;
 }
 
 function firstByField(found: readonly (readonly [string, string])[]): ReadonlyMap<string, string> {

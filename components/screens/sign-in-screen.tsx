@@ -1,12 +1,13 @@
 import { Redirect } from 'expo-router';
-import { View } from 'react-native';
+import { Pressable, View } from 'react-native';
 import { describeError } from '@/components/api/api-problem';
 import { useSetup, useSignIn } from '@/components/api/use-account';
-import { line, space } from '@/components/theme/tokens';
+import { line, space, target } from '@/components/theme/tokens';
 import { useTheme } from '@/components/theme/use-theme';
-import { Button } from '@/components/ui/button';
+import { Button, type WebPressState } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Form } from '@/components/ui/form';
+import { Icon } from '@/components/ui/icon';
 import { Link } from '@/components/ui/link';
 import { Notice } from '@/components/ui/notice';
 import { ErrorState, LoadingState } from '@/components/ui/states';
@@ -67,7 +68,7 @@ function SignInForm() {
       />
       {form.error ? <Notice kind="error" text={form.error} /> : null}
       <Button label="Sign in" variant="primary" onPress={form.submit} busy={form.busy} wide />
-      <Link href="/forgotten" label="Forgotten the password?" />
+      <Link alone href="/forgotten" label="Forgotten the password?" />
     </Form>
   );
 }
@@ -84,18 +85,56 @@ function DemoAccounts({ accounts }: { readonly accounts: Setup['demoAccounts'] }
         The demo is on: everything in it is invented, and its people sign in with one press.
       </Text>
       {signIn.isError ? <Notice kind="error" text={describeError(signIn.error)} /> : null}
-      <View role="list" style={{ gap: space.s }}>
+      <View role="list" style={{ borderTopWidth: line.hair, borderColor: color.rule }}>
         {accounts.map(({ name, email, password, roles }) => (
           <View key={email} role="listitem">
-            <Button
-              label={`${rolesText(roles)}: ${name}`}
-              onPress={() => signIn.mutate({ email, password })}
+            <AccountLine
+              name={name}
+              roles={rolesText(roles)}
               busy={signIn.isPending && signIn.variables.email === email}
-              wide
+              onPress={() => signIn.mutate({ email, password })}
             />
           </View>
         ))}
       </View>
     </View>
+  );
+}
+
+type AccountLineProps = {
+  readonly name: string;
+  readonly roles: string;
+  readonly busy: boolean;
+  readonly onPress: () => void;
+};
+
+function AccountLine({ name, roles, busy, onPress }: AccountLineProps) {
+  const { color } = useTheme();
+  return (
+    <Pressable
+      role="button"
+      aria-label={`${roles} ${name}`}
+      aria-busy={busy || undefined}
+      disabled={busy}
+      onPress={onPress}
+      style={({ pressed, hovered }: WebPressState) => ({
+        minHeight: target.min,
+        flexDirection: 'row',
+        alignItems: 'center',
+        gap: space.m,
+        paddingHorizontal: space.s,
+        borderBottomWidth: line.hair,
+        borderColor: color.rule,
+        backgroundColor: pressed || hovered === true ? color.hover : 'transparent',
+      })}
+    >
+      <Text variant="strong" style={{ flex: 1 }}>
+        {roles}
+      </Text>
+      <Text tone="soft" align="right">
+        {busy ? 'Signing in' : name}
+      </Text>
+      <Icon name="chevron-right" tone="inkSoft" />
+    </Pressable>
   );
 }

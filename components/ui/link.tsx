@@ -15,14 +15,23 @@ type LinkProps = {
   readonly current?: boolean;
 };
 
+type TextLinkProps = LinkProps & {
+  /** Stands alone in its line: as high as a button. */
+  readonly alone?: boolean;
+};
+
 /** A link in a line of text. */
-export function Link({ href, label, children }: LinkProps) {
+export function Link({ href, label, children, alone = false }: TextLinkProps) {
   const { color } = useTheme();
   return (
     <RouterLink
       href={href}
       aria-label={label}
-      style={[textStyle('body'), { color: color.action, textDecorationLine: 'underline' }]}
+      style={[
+        textStyle('body'),
+        { color: color.action, textDecorationLine: 'underline' },
+        alone ? { lineHeight: target.min, alignSelf: 'flex-start', minWidth: target.min } : null,
+      ]}
     >
       {children ?? label}
     </RouterLink>

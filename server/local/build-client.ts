@@ -21,6 +21,7 @@ const INPUTS = [
   'components',
   'shared',
   'assets',
+  'public',
   'app.json',
   'babel.config.js',
   'metro.config.js',
