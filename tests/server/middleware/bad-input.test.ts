@@ -81,6 +81,52 @@ test('a body of 50 MB gets its answer, announced or not', async () => {
   expect(status).toBe(413);
 });
 
+describe('every way in that takes a body', () => {
+  const id = '0123456789abcdefghjkmnpqrs';
+  const ways = [
+    ['POST', '/api/jobs'],
+    ['PATCH', `/api/jobs/${id}`],
+    ['POST', `/api/jobs/${id}/platforms`],
+    ['PATCH', `/api/platforms/${id}`],
+    ['POST', `/api/platforms/${id}/layouts`],
+    ['POST', '/api/parts'],
+    ['PUT', `/api/parts/${id}`],
+    ['PATCH', `/api/parts/${id}`],
+    ['PATCH', `/api/layouts/${id}`],
+    ['POST', `/api/layouts/${id}/comments`],
+    ['POST', `/api/layouts/${id}/revisions`],
+    ['POST', `/api/comments/${id}/replies`],
+    ['PATCH', `/api/comments/${id}`],
+    ['POST', `/api/revisions/${id}/return`],
+    ['POST', `/api/revisions/${id}/freeze`],
+    ['POST', `/api/revisions/${id}/comments`],
+  ] as const;
+  const large = `{"name":"${'x'.repeat(50 * 1024 * 1024)}"}`;
+  const deep = `{"content":${'{"a":'.repeat(1000)}1${'}'.repeat(1000)}}`;
+  const send = (method: string, path: string, body: string) =>
+    fetch(`${server.url}${path}`, {
+      method,
+      body,
+      headers: { origin: server.url, 'content-type': 'application/json' },
+    });
+
+  test.each(ways)('%s %s refuses 50 MB and a thousand levels', async (method, path) => {
+    const tooLarge = await send(method, path, large);
+    expect([tooLarge.status, await readProblem(tooLarge)]).toEqual([413, 'too-large']);
+    const tooDeep = await send(method, path, deep);
+    expect([tooDeep.status, await readProblem(tooDeep)]).toEqual([400, 'too-deep']);
+  });
+
+  test('bodies that are no objects are refused with a path', async () => {
+    const agent = await server.signIn(await buildMember(['integrator']));
+    for (const body of ['[]', '{"content":[]}', '{"content":null}', '{"content":{"kind":"antenna"}}']) {
+      const response = await agent.post('/api/parts').type('json').send(body);
+      expect(response.status).toBe(400);
+      expect(problemSchema.parse(response.body).problems?.length).toBeGreaterThan(0);
+    }
+  });
+});
+
 test.each(['/api/%E0%A4%A', '/api/members/%00', '/api/nothing', '/api/invitations/by-token/%ff'])(
   'the address %s is a 4xx',
   async (path) => {

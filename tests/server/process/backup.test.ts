@@ -1,8 +1,11 @@
 import { existsSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { agent as createAgent } from 'supertest';
 import { PRIVATE_DATABASE } from '@/server/database/open-database';
 import { addressInstance, startPrivateDatabase } from '@/server/local/private-database';
 import { runTool } from '@/server/local/run-tool';
+import { jobDetailSchema, jobListSchema } from '@/shared/api/jobs';
+import { setupSchema } from '@/shared/api/session';
 import { makeDataFolder, removeDataFolder, spawnServer } from '../../support/spawned-server';
 
 jest.setTimeout(120_000);
@@ -53,18 +56,32 @@ async function readEverything(data: string) {
   }
 }
 
-/** A revision as the product writes it needs a layout and its estimate; here only the row counts. */
-const REVISION = `
-  SET FOREIGN_KEY_CHECKS = 0;
-  INSERT INTO revisions SELECT '0123456789abcdefghjkmnpqrs', team_id, '0123456789abcdefghjkmnpqrs', 'A', SHA2('{"ä":1}', 256),
-    '{"ä":1}', 1, 'note', 'job', 'platform', 'layout', id, 'name', NOW(3) FROM memberships LIMIT 1;
-  INSERT INTO revision_events (revision_id, kind, member_id, member_name, reason, at)
-    SELECT '0123456789abcdefghjkmnpqrs', 'saved', id, 'name', NULL, NOW(3) FROM memberships LIMIT 1;
-`;
+/** Saves a revision of the demo's first layout, submits it and has it frozen, as its people would. */
+async function freezeRevision(url: string): Promise<void> {
+  const { demoAccounts } = setupSchema.parse((await createAgent(url).get('/api/setup')).body);
+  const signIn = async (email: string) => {
+    const agent = createAgent(url).set('Origin', url);
+    const account = demoAccounts.find((candidate) => candidate.email === email);
+    await agent.post('/api/session').send({ email, password: account?.password }).expect(200);
+    return { agent, password: account?.password };
+  };
+  const { agent } = await signIn('integrator@example.com');
+  const [job] = jobListSchema.parse((await agent.get('/api/jobs')).body).items;
+  const { platforms } = jobDetailSchema.parse((await agent.get(`/api/jobs/${job?.id}`)).body);
+  const layoutId = platforms[0]?.layouts[0]?.id;
+  const note = 'Größe geprüft \u{1F4E1}';
+  const saved = await agent.post(`/api/layouts/${layoutId}/revisions`).send({ note }).expect(201);
+  await agent.post(`/api/revisions/${saved.body.id}/submit`).expect(200);
+  const approver = await signIn('approver@example.com');
+  await approver.agent
+    .post(`/api/revisions/${saved.body.id}/freeze`)
+    .send({ reason: 'Agreed.', password: approver.password })
+    .expect(200);
+}
 
 test('a backup made while the server runs comes back with every row, file, secret and revision hash', async () => {
   const server = spawnServer(folder);
-  await server.ready;
+  await freezeRevision(await server.ready);
   mkdirSync(join(folder, 'files', 'ab'), { recursive: true });
   writeFileSync(join(folder, 'files', 'ab', 'measured.s2p'), Buffer.from([0, 1, 2, 255]));
   const archive = join(restored, 'backup.tgz');
@@ -77,7 +94,9 @@ test('a backup made while the server runs comes back with every row, file, secre
   expect(await command('restore', target, archive)).toEqual({ code: 0, complaint: '' });
   expect(readFileSync(join(target, 'files', 'ab', 'measured.s2p'))).toEqual(Buffer.from([0, 1, 2, 255]));
   expect(readFileSync(join(target, 'session-secret'))).toEqual(readFileSync(join(folder, 'session-secret')));
-  expect(await readEverything(target)).toEqual(await readEverything(folder));
+  const [before, after] = [await readEverything(folder), await readEverything(target)];
+  expect(after).toEqual(before);
+  expect(after.hashes).toMatch(/\tA\t[0-9a-f]{64}\t1\n/);
   const again = spawnServer(target);
   expect(again.output()).not.toContain('Loaded the demo');
   await again.ready;
@@ -87,17 +106,9 @@ test('a backup made while the server runs comes back with every row, file, secre
 
 test('a backup made while it is stopped keeps saved revisions and their immutability', async () => {
   const server = spawnServer(folder);
-  await server.ready;
+  await freezeRevision(await server.ready);
   server.child.kill('SIGTERM');
-  await server.exit;
-  const instance = await startPrivateDatabase(join(folder, 'database'));
-  const written = await runTool(
-    'mariadb',
-    [...addressInstance(instance.socket), '--default-character-set=utf8mb4', PRIVATE_DATABASE],
-    REVISION,
-  );
-  expect(written).toMatchObject({ code: 0 });
-  await instance.stop();
+  expect(await server.exit).toBe(0);
   const archive = join(restored, 'backup.tgz');
   expect((await command('backup', folder, archive)).code).toBe(0);
   const target = join(restored, 'data');
