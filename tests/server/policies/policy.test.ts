@@ -80,10 +80,69 @@ test('the table names every action', () => {
   expect([...named].sort()).toEqual(Object.keys(every).sort());
 });
 
-test('roles add up', () => {
-  const both = actorWith('installer', 'reviewer');
-  expect(can(both, 'see-layouts', own)).toBe(true);
-  expect(can(both, 'edit-layouts', own)).toBe(false);
+/** What each line of the team's rules is about. */
+const SUBJECTS: Readonly<Record<string, readonly (readonly [Action, ActionRecords[Action]])[]>> = {
+  'see jobs, layouts, revisions': [
+    ['see-jobs', own],
+    ['see-layouts', own],
+    ['see-revision', draft],
+    ['see-revision', frozen],
+  ],
+  'edit platforms, layouts, radios, parts': [
+    ['edit-jobs', own],
+    ['edit-layouts', own],
+    ['edit-parts', own],
+  ],
+  comment: [
+    ['comment-on-layout', own],
+    ['comment-on-revision', draft],
+    ['comment-on-revision', frozen],
+  ],
+  'save and submit a revision': [
+    ['save-revision', own],
+    ['submit-revision', draft],
+  ],
+  'return or freeze (never one’s own submission)': [
+    ['return-revision', draft],
+    ['freeze-revision', draft],
+  ],
+  'invite, change roles, deactivate': [
+    ['invite', own],
+    ['change-roles', own],
+    ['deactivate', own],
+  ],
+};
+
+test.each`
+  may                                                | administrator | integrator | reviewer | approver | installer
+  ${'see jobs, layouts, revisions'}                  | ${'yes'}      | ${'yes'}   | ${'yes'} | ${'yes'} | ${'frozen revisions only'}
+  ${'edit platforms, layouts, radios, parts'}        | ${'yes'}      | ${'yes'}   | ${'no'}  | ${'no'}  | ${'no'}
+  ${'comment'}                                       | ${'yes'}      | ${'yes'}   | ${'yes'} | ${'yes'} | ${'frozen revisions only'}
+  ${'save and submit a revision'}                    | ${'yes'}      | ${'yes'}   | ${'no'}  | ${'no'}  | ${'no'}
+  ${'return or freeze (never one’s own submission)'} | ${'no'}       | ${'no'}    | ${'no'}  | ${'yes'} | ${'no'}
+  ${'invite, change roles, deactivate'}              | ${'yes'}      | ${'no'}    | ${'no'}  | ${'no'}  | ${'no'}
+`('the rules of the team hold: $may', ({ may, ...cells }: { may: string } & Record<Role, string>) => {
+  for (const role of ROLES) {
+    for (const [action, record] of SUBJECTS[may] ?? []) {
+      const expected = cells[role] === 'frozen revisions only' ? record === frozen : cells[role] === 'yes';
+      expect([role, action, can(actorWith(role), action, record)]).toEqual([role, action, expected]);
+    }
+  }
+  expect(SUBJECTS[may]).not.toHaveLength(0);
+});
+
+test('a set of roles may what any of them may, and nothing else', () => {
+  for (let set = 0; set < 2 ** ROLES.length; set += 1) {
+    const roles = ROLES.filter((_role, index) => (set & (1 << index)) !== 0);
+    for (const [statement, action, record, allowed] of TABLE) {
+      const expected = roles.some((role) => allowed[ROLES.indexOf(role)]);
+      expect([roles, statement, can(actorWith(...roles), action, record)]).toEqual([
+        roles,
+        statement,
+        expected,
+      ]);
+    }
+  }
 });
 
 describe('one’s own submission', () => {
