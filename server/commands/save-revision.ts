@@ -19,6 +19,13 @@ export interface RevisionInput {
   readonly names: { readonly job: string; readonly platform: string; readonly layout: string };
 }
 
+/** Who saves. */
+export interface Saver {
+  readonly teamId: string;
+  readonly memberId: string;
+  readonly memberName: string;
+}
+
 /**
  * Saves a state of a layout under the next letter, with its canonical JSON and the SHA-256 of that, in one
  * transaction that holds the layout's row: letters have no gap and none is given twice.
@@ -27,39 +34,48 @@ export async function saveRevision(
   services: Services,
   by: SignedIn,
   layoutId: string,
-  { state, results, note, names }: RevisionInput,
+  input: RevisionInput,
 ): Promise<Revision> {
   const { teamId, memberId } = by.actor;
-  return transact(services.sequelize, async (transaction) => {
-    await Layout.findByPk(layoutId, { attributes: ['id'], transaction, lock: transaction.LOCK.UPDATE });
-    const letter = nextRevisionLetter(await findLastLetter(layoutId, transaction));
-    const { solverVersion } = results;
-    const content = { layoutId, letter, document: state.document, results, solverVersion };
-    const now = new Date();
-    const revision = await Revision.create(
-      {
-        teamId,
-        layoutId,
-        letter,
-        hash: revisionHash(content),
-        content: canonicalJson(content),
-        sequence: state.sequence,
-        note,
-        jobName: names.job,
-        platformName: names.platform,
-        layoutName: names.layout,
-        savedById: memberId,
-        savedByName: by.person.name,
-        savedAt: now,
-      },
-      { transaction },
-    );
-    await RevisionEvent.create(
-      { revisionId: revision.id, kind: 'saved', memberId, memberName: by.person.name, at: now },
-      { transaction },
-    );
-    return loadRevision(teamId, revision.id, transaction);
-  });
+  const saver = { teamId, memberId, memberName: by.person.name };
+  return transact(services.sequelize, (transaction) => writeRevision(saver, layoutId, input, transaction));
+}
+
+/** Like `saveRevision`, within a transaction that does more. */
+export async function writeRevision(
+  { teamId, memberId, memberName }: Saver,
+  layoutId: string,
+  { state, results, note, names }: RevisionInput,
+  transaction: Transaction,
+): Promise<Revision> {
+  await Layout.findByPk(layoutId, { attributes: ['id'], transaction, lock: transaction.LOCK.UPDATE });
+  const letter = nextRevisionLetter(await findLastLetter(layoutId, transaction));
+  const { solverVersion } = results;
+  const content = { layoutId, letter, document: state.document, results, solverVersion };
+  const now = new Date();
+  const revision = await Revision.create(
+    {
+      teamId,
+      layoutId,
+      letter,
+      hash: revisionHash(content),
+      content: canonicalJson(content),
+      sequence: state.sequence,
+      note,
+      jobName: names.job,
+      platformName: names.platform,
+      layoutName: names.layout,
+      savedById: memberId,
+      savedByName: memberName,
+      savedAt: now,
+    },
+    { transaction },
+  );
+  await RevisionEvent.create(
+    { revisionId: revision.id, kind: 'saved', memberId, memberName, at: now },
+    { transaction },
+  );
+  return loadRevision(teamId, revision.id, transaction);
 }
 
 /** The letter of a layout's newest revision, null before the first. */

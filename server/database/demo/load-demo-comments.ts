@@ -1,12 +1,11 @@
 import { CommentReplyRow } from '../../models/comment-reply-row';
 import { CommentRow } from '../../models/comment-row';
 import { decodeDocument } from '../../models/document-codec';
-import { Job } from '../../models/job';
-import { Layout } from '../../models/layout';
-import { Platform } from '../../models/platform';
+import type { Layout } from '../../models/layout';
 import type { CommentTarget } from '@/shared/api/comments';
 import { DEMO_COMMENTS, type DemoComment } from './demo-comments';
 import type { DemoContext } from './demo-context';
+import { findDemoLayout } from './find-demo-layout';
 
 /** Puts the demo's comments on its layouts; nobody gets mail for them. */
 export async function loadDemoComments(context: DemoContext): Promise<void> {
@@ -15,7 +14,7 @@ export async function loadDemoComments(context: DemoContext): Promise<void> {
   let time = Date.now() - 1000;
   const next = () => new Date((time += 1));
   for (const comment of DEMO_COMMENTS) {
-    const layout = await findLayout(context, comment.job);
+    const { layout } = await findDemoLayout(context, comment.job);
     const number = layout.commentCount + 1;
     await layout.update({ commentCount: number }, { transaction });
     const createdAt = next();
@@ -42,17 +41,6 @@ export async function loadDemoComments(context: DemoContext): Promise<void> {
       await row.update(resolved, { transaction });
     }
   }
-}
-
-async function findLayout({ team, transaction }: DemoContext, jobName: string): Promise<Layout> {
-  const where = { teamId: team.id };
-  const job = await Job.findOne({ where: { ...where, name: jobName }, transaction, rejectOnEmpty: true });
-  const platform = await Platform.findOne({
-    where: { ...where, jobId: job.id },
-    transaction,
-    rejectOnEmpty: true,
-  });
-  return Layout.findOne({ where: { ...where, platformId: platform.id }, transaction, rejectOnEmpty: true });
 }
 
 function targetOf({ target }: DemoComment, layout: Layout): CommentTarget {

@@ -9,6 +9,7 @@ import { DEMO_PEOPLE, DEMO_TEAM } from './demo-accounts';
 import type { DemoContext } from './demo-context';
 import { loadDemoComments } from './load-demo-comments';
 import { loadDemoJobs } from './load-demo-jobs';
+import { loadDemoRevision } from './load-demo-revision';
 
 /**
  * Fills an empty database with the demo scenario, all of it or nothing; leaves any other alone.
@@ -45,6 +46,7 @@ export async function loadDemo(sequelize: Sequelize, sessionSecret: string): Pro
     };
     await loadDemoJobs(context);
     await loadDemoComments(context);
+    await loadDemoRevision(context);
   });
   return true;
 }

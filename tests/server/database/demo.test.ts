@@ -12,8 +12,10 @@ import { commentListSchema } from '@/shared/api/comments';
 import { jobDetailSchema, jobListSchema } from '@/shared/api/jobs';
 import { layoutSchema } from '@/shared/api/layouts';
 import { partListSchema } from '@/shared/api/parts';
+import { frozenRevisionListSchema, revisionDetailSchema } from '@/shared/api/revisions';
 import { createEstimator } from '@/shared/estimate/estimate';
 import { misplacedAntennas } from '@/shared/layout/placement';
+import { revisionHash } from '@/shared/layout/revision-hash';
 import { startTestServer, type TestServer } from '../../support/test-server';
 
 const SECRET = 'a secret that only this test knows, long enough';
@@ -110,4 +112,18 @@ test('the shelf holds antennas and radios, all of them to be edited', async () =
   const { items } = partListSchema.parse((await agent.get('/api/parts')).body);
   expect(new Set(items.map(({ content }) => content.kind))).toEqual(new Set(['antenna', 'radio']));
   expect(items.every(({ abilities }) => abilities.edit)).toBe(true);
+});
+
+test('the installer finds one frozen revision, whose hash holds and which nobody froze for themselves', async () => {
+  const agent = await signIn('installer@example.com');
+  const { items } = frozenRevisionListSchema.parse((await agent.get('/api/revisions')).body);
+  expect(items).toMatchObject([{ job: 'Harbour office', letter: 'A', frozenBy: 'Nesta Quill' }]);
+  const detail = revisionDetailSchema.parse((await agent.get(`/api/revisions/${items[0]!.id}`)).body);
+  expect(revisionHash(detail)).toBe(items[0]!.hash);
+  expect(detail.events.map(({ kind, by }) => [kind, by])).toEqual([
+    ['saved', 'Ilka Ferrow'],
+    ['submitted', 'Ilka Ferrow'],
+    ['frozen', 'Nesta Quill'],
+  ]);
+  expect(detail.results.counts.lacking).toBe(0);
 });
