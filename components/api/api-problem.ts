@@ -38,7 +38,8 @@ export function describeError(error: unknown): string {
 
 /** One sentence about what stopped a whole page: a piece of it that did not arrive, or a fault of ours. */
 export function describePageError(error: unknown): string {
-  if (error instanceof Error && /load|fetch|chunk/i.test(error.message) && !(error instanceof TypeError)) {
+  // The bundler's loader says so by this name, and exports no class to compare with.
+  if (error instanceof Error && error.name === 'AsyncRequireError') {
     return 'A piece of it did not arrive: the connection is gone, or the server has a newer one. What you typed is kept.';
   }
   return describeError(error);

@@ -2,6 +2,7 @@ import { Fragment, useState } from 'react';
 import { View } from 'react-native';
 import type { Href } from 'expo-router';
 import { describeError } from '@/components/api/api-problem';
+import { useSession } from '@/components/api/session-provider';
 import { useMails } from '@/components/api/use-people';
 import { line, space } from '@/components/theme/tokens';
 import { useTheme } from '@/components/theme/use-theme';
@@ -10,10 +11,16 @@ import { Link } from '@/components/ui/link';
 import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
 import { Text } from '@/components/ui/text';
 import type { Mail } from '@/shared/api/session';
+import { NotFoundScreen } from './not-found-screen';
 import { ScreenFrame } from './screen-frame';
 
 /** The mails that the demo's server sent: caught here instead of leaving the machine. */
 export function MailsScreen() {
+  const { abilities } = useSession();
+  return abilities.seeMails ? <Mails /> : <NotFoundScreen />;
+}
+
+function Mails() {
   const mails = useMails();
   const [open, setOpen] = useState<string | null>(null);
   return (

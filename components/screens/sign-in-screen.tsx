@@ -108,12 +108,12 @@ type AccountLineProps = {
   readonly onPress: () => void;
 };
 
+/** Its name is what stands in it: the roles, then the person. */
 function AccountLine({ name, roles, busy, onPress }: AccountLineProps) {
   const { color } = useTheme();
   return (
     <Pressable
       role="button"
-      aria-label={`${roles} ${name}`}
       aria-busy={busy || undefined}
       disabled={busy}
       onPress={onPress}
