@@ -10,7 +10,7 @@ import { ThemeDocument } from '@/components/theme/theme-document';
 import { useTheme } from '@/components/theme/use-theme';
 import { ErrorState, LoadingState } from '@/components/ui/states';
 import { DoorFrame } from './door-frame';
-import { homeOf } from './places';
+import { homeOf, placeWithin } from './places';
 import { RenewalDialog } from './renewal-dialog';
 
 /** Screens that are shown to those who are not signed in; signed-in people are sent on. */
@@ -83,11 +83,7 @@ function Doorkeeper({ children }: { readonly children: ReactNode }) {
       const { seeJobs } = state.session.abilities;
       if (!seeJobs && OF_JOBS.test(path)) return <Redirect href={homeOf(state.session)} />;
       if (path !== '/' && !DOORS.includes(path)) return children;
-      return (
-        <Redirect
-          href={next?.startsWith('/') && !next.startsWith('//') ? (next as Href) : homeOf(state.session)}
-        />
-      );
+      return <Redirect href={(placeWithin(next) ?? homeOf(state.session)) as Href} />;
     }
   }
 }

@@ -12,6 +12,7 @@ import { EmptyState, ErrorState, LoadingState } from '@/components/ui/states';
 import { Text } from '@/components/ui/text';
 import type { Mail } from '@/shared/api/session';
 import { NotFoundScreen } from './not-found-screen';
+import { placeWithin } from './places';
 import { ScreenFrame } from './screen-frame';
 
 /** The mails that the demo's server sent: caught here instead of leaving the machine. */
@@ -92,7 +93,7 @@ function MailText({ text }: { readonly text: string }) {
   return (
     <Text selectable>
       {pieces.map((piece, index) => {
-        const path = pathHere(piece);
+        const path = /^https?:/.test(piece) ? placeWithin(piece) : null;
         return (
           <Fragment key={index}>
             {path === null ? piece : <Link href={path as Href} label={piece} />}
@@ -101,10 +102,4 @@ function MailText({ text }: { readonly text: string }) {
       })}
     </Text>
   );
-}
-
-function pathHere(piece: string): string | null {
-  if (!/^https?:\/\//.test(piece) || !URL.canParse(piece)) return null;
-  const { origin, pathname } = new URL(piece);
-  return origin === globalThis.location.origin ? pathname : null;
 }

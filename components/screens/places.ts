@@ -26,3 +26,14 @@ export function placesFor({ abilities }: Session): readonly Place[] {
 export function homeOf(session: Session): '/jobs' | '/frozen' {
   return session.abilities.seeJobs ? '/jobs' : '/frozen';
 }
+
+// A second slash (or what browsers take for one) would begin another server's address; a control character is
+// dropped by them and could hide one.
+const PATH = /^\/(?![/\\])[^\\\s]*$/;
+
+/** The place within this product that an address means; null when it leads out of it. */
+export function placeWithin(address: string | undefined): string | null {
+  const { origin } = globalThis.location;
+  const path = address?.startsWith(`${origin}/`) ? address.slice(origin.length) : address;
+  return path !== undefined && PATH.test(path) ? path : null;
+}

@@ -1,4 +1,4 @@
-import { homeOf, placesFor } from '@/components/screens/places';
+import { homeOf, placesFor, placeWithin } from '@/components/screens/places';
 import type { Session } from '@/shared/api/session';
 import { SESSION } from '@/tests/support/stub-api';
 
@@ -31,5 +31,30 @@ describe('places of the navigation', () => {
       const session = having({ seeJobs });
       expect(placesFor(session).map(({ href }) => href)).toContain(homeOf(session));
     }
+  });
+});
+
+describe('a place within the product', () => {
+  test.each([
+    ['/people', '/people'],
+    ['/layouts/abc?comment=7#end', '/layouts/abc?comment=7#end'],
+    [`${globalThis.location.origin}/password/abc`, '/password/abc'],
+  ])('%s leads to %s', (address, place) => {
+    expect(placeWithin(address)).toBe(place);
+  });
+
+  test.each([
+    undefined,
+    '',
+    'people',
+    '//elsewhere.example.com',
+    '/\\elsewhere.example.com',
+    '/\t/elsewhere.example.com',
+    'https://elsewhere.example.com/people',
+    `${globalThis.location.origin}.example.com/people`,
+    `${globalThis.location.origin}//elsewhere.example.com`,
+    'javascript:alert(1)',
+  ])('%j leads nowhere', (address) => {
+    expect(placeWithin(address)).toBeNull();
   });
 });
