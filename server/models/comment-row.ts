@@ -45,7 +45,7 @@ export class CommentRow extends Model<InferAttributes<CommentRow>, InferCreation
         target: { type: DataTypes.TEXT, allowNull: false },
         text: { type: DataTypes.STRING(1000), allowNull: false },
         authorId: idColumn(),
-        resolvedAt: { type: DataTypes.DATE(3), allowNull: true },
+        resolvedAt: { type: DataTypes.DATE(3), allowNull: true, defaultValue: null },
         resolvedById: optionalIdColumn(),
         createdAt: DataTypes.DATE(3),
         updatedAt: DataTypes.DATE(3),

@@ -34,7 +34,7 @@ export class Membership extends Model<InferAttributes<Membership>, InferCreation
         teamId: idColumn(),
         personId: idColumn(),
         roles: rolesColumn(),
-        deactivatedAt: { type: DataTypes.DATE(3), allowNull: true },
+        deactivatedAt: { type: DataTypes.DATE(3), allowNull: true, defaultValue: null },
         createdAt: DataTypes.DATE(3),
         updatedAt: DataTypes.DATE(3),
       },

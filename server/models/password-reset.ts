@@ -32,7 +32,7 @@ export class PasswordReset extends Model<
         personId: idColumn(),
         tokenHash: { type: DataTypes.CHAR(64), allowNull: false },
         expiresAt: { type: DataTypes.DATE(3), allowNull: false },
-        usedAt: { type: DataTypes.DATE(3), allowNull: true },
+        usedAt: { type: DataTypes.DATE(3), allowNull: true, defaultValue: null },
         createdAt: DataTypes.DATE(3),
         updatedAt: DataTypes.DATE(3),
       },

@@ -37,7 +37,7 @@ export class RevisionEvent extends Model<
         kind: { type: DataTypes.STRING(20), allowNull: false },
         memberId: idColumn(),
         memberName: { type: DataTypes.STRING(120), allowNull: false },
-        reason: { type: DataTypes.STRING(1000), allowNull: true },
+        reason: { type: DataTypes.STRING(1000), allowNull: true, defaultValue: null },
         at: { type: DataTypes.DATE(3), allowNull: false },
       },
       { sequelize, modelName: 'RevisionEvent', tableName: 'revision_events', timestamps: false },
