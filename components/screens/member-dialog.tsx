@@ -11,7 +11,7 @@ import { useScreenForm } from './screen-form';
 
 /** Changes somebody's roles, or whether they may sign in to this team. */
 export function MemberDialog({ member, onClose }: { readonly member: Member; readonly onClose: () => void }) {
-  const { id, name, active, abilities } = member;
+  const { id, name, active, isYou, abilities } = member;
   const change = useChangeMember();
   const activity = useChangeMember();
   const form = useScreenForm({
@@ -29,7 +29,7 @@ export function MemberDialog({ member, onClose }: { readonly member: Member; rea
       onClose={onClose}
       actions={
         <>
-          {abilities.deactivate ? (
+          {abilities.deactivate && !isYou ? (
             <Button
               label={active ? 'Deactivate' : 'Activate again'}
               variant={active ? 'danger' : 'plain'}

@@ -48,7 +48,7 @@ function NewPasswordForm({ token, onDone }: { readonly token: string; readonly o
     onDone,
   });
   return (
-    <Form label="New password" onSubmit={form.submit}>
+    <Form label="Set a new password" onSubmit={form.submit}>
       <Field
         label="New password"
         hint={PASSWORD_HINT}

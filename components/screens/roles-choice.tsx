@@ -1,5 +1,7 @@
 import { View } from 'react-native';
+import { space } from '@/components/theme/tokens';
 import { Checkbox } from '@/components/ui/checkbox';
+import { Icon } from '@/components/ui/icon';
 import { Text } from '@/components/ui/text';
 import { ROLES, type Role } from '@/shared/api/fields';
 import { ROLE_WORDS } from './role-words';
@@ -26,11 +28,19 @@ export function RolesChoice({ roles, onChange, error }: RolesChoiceProps) {
           }
         />
       ))}
-      {error ? (
-        <Text variant="small" tone="lacking" live="polite">
-          {error}
-        </Text>
-      ) : null}
+      <View
+        aria-live="polite"
+        style={{ display: error ? 'flex' : 'none', flexDirection: 'row', gap: space.xs }}
+      >
+        {error ? (
+          <>
+            <Icon name="error" size="s" tone="lacking" />
+            <Text variant="small" tone="lacking">
+              {error}
+            </Text>
+          </>
+        ) : null}
+      </View>
     </View>
   );
 }
