@@ -23,7 +23,7 @@ export function antennaResult(
   let pattern: PatternResult | null = null;
   let { reason } = scene;
   if (wantsPattern && frequency !== undefined && port !== undefined) {
-    const { solver, leftOut } = solvers.at(frequency);
+    const { solver, leftOut, wireNotHeld } = solvers.at(frequency);
     if (leftOut.has(port)) {
       reason ??= {
         code: 'too-long',
@@ -31,7 +31,7 @@ export function antennaResult(
       };
     } else {
       const { gainDbi, aloneDbi, rippleDb, deepestBearingDeg } = solver.pattern(0, port, CUT);
-      const entry = solver.wireNotHeld(0, port);
+      const entry = wireNotHeld(port);
       pattern = {
         frequency,
         ...CUT,

@@ -1,7 +1,7 @@
 import { wireLength } from '../em/chain';
 import { createLiveSolver, type LiveSolver } from '../em/live/live-solver';
 import { createOwnCurrentCache } from '../em/live/own-current-cache';
-import type { Ground, Wire } from '../em/scene';
+import type { Ground, ValidityEntry, Wire } from '../em/scene';
 import { nearestFrequency } from '../radio/band-frequencies';
 import { wavelength } from '../units/constants';
 
@@ -20,9 +20,15 @@ export type SolverAt = {
   readonly solver: LiveSolver;
   /** Wires that are too long there. */
   readonly leftOut: ReadonlySet<string>;
+  /** Why a wire by itself is not held there, or null; found once however many pairs ask. */
+  wireNotHeld(wire: string): ValidityEntry | null;
 };
 
-type Kept = SolverAt & { revision: number; leftOut: ReadonlySet<string> };
+type Kept = SolverAt & {
+  revision: number;
+  leftOut: ReadonlySet<string>;
+  readonly asked: Map<string, ValidityEntry | null>;
+};
 
 /** One solver a frequency, made when it is asked and kept as long as its frequency is asked for. */
 export class FrequencySolvers {
@@ -58,12 +64,19 @@ export class FrequencySolvers {
     if (known) {
       known.solver.update(wires);
       known.leftOut = leftOut;
+      known.asked.clear();
       known.revision = this.revision;
       return known;
     }
     const { ground, cache, revision } = this;
     const solver = createLiveSolver({ ground, frequencies: [solved], wires, cache });
-    const made: Kept = { frequency: solved, solver, leftOut, revision };
+    const asked = new Map<string, ValidityEntry | null>();
+    const wireNotHeld = (wire: string) => {
+      let entry = asked.get(wire);
+      if (entry === undefined) asked.set(wire, (entry = solver.wireNotHeld(0, wire)));
+      return entry;
+    };
+    const made: Kept = { frequency: solved, solver, leftOut, revision, asked, wireNotHeld };
     this.kept.set(solved, made);
     return made;
   }

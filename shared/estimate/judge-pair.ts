@@ -91,7 +91,7 @@ function leastIsolationDb({ solver }: SolverAt, from: AntennaScene, into: Antenn
 
 /** Why the two are not held at one frequency, or null. */
 function reasonAt(
-  { solver, leftOut, frequency }: SolverAt,
+  { leftOut, frequency, wireNotHeld }: SolverAt,
   from: AntennaScene,
   into: AntennaScene,
 ): Reason | null {
@@ -103,7 +103,7 @@ function reasonAt(
           message: `${antenna.label} is longer than ${MOST_WAVELENGTHS} wavelengths at ${frequencyWords(frequency)}.`,
         };
       }
-      const entry = solver.wireNotHeld(0, port);
+      const entry = wireNotHeld(port);
       if (entry !== null) {
         return {
           code: entry.code,

@@ -26,6 +26,24 @@ test('carrying the land-mobile whip over the cab makes the pair clear and leaves
   expect(stateOf(cured, 'A2', 'A3')).toBe('clear');
 });
 
+test('many free places cure the pair that lacks and leave no other lacking', () => {
+  const estimator = createEstimator();
+  const cures: string[] = [];
+  const { outline } = Object.values(van.surfaces)[0]!;
+  const xs = outline.map(({ x }) => x);
+  const ys = outline.map(({ y }) => y);
+  for (let x = Math.min(...xs) + 0.1; x < Math.max(...xs); x += 0.4) {
+    for (let y = Math.min(...ys) + 0.1; y < Math.max(...ys); y += 0.3) {
+      const moved = withMoved('A2', x, y);
+      if (placementProblem(moved, moved.antennas[antennaOf('A2').id]!) !== null) continue;
+      const estimate = estimator.estimate(moved, { patternFor: [] });
+      if (estimate.counts.lacking === 0 && stateOf(estimate, 'A2', 'A3') === 'clear') cures.push(`${x} ${y}`);
+    }
+  }
+  // Found by anybody who drags the whip away from its neighbour, not only at one secret spot.
+  expect(cures.length).toBeGreaterThanOrEqual(5);
+});
+
 test('every antenna of the demo stands where it may', () => {
   for (const job of DEMO_JOBS) {
     for (const { layouts } of job.platforms) {

@@ -216,8 +216,8 @@ function withElement(document: LayoutDocument, id: string, fields: Partial<WireE
   }));
 }
 
-/** Rounding aside (1e-6 dB): the order of elimination depends on what moved last. */
+/** Rounding aside (1e-9 dB): the order of elimination depends on what moved last. */
 function expectClose(value: number | null, other: number | null): void {
   expect(value === null).toBe(other === null);
-  if (value !== null) expect(Math.abs(value - other!)).toBeLessThan(1e-6);
+  if (value !== null) expect(Math.abs(value - other!)).toBeLessThan(1e-9);
 }
