@@ -90,7 +90,8 @@ function centreLine({ platform }: DrawnPlatform, view: Viewport): string {
   const box = boxAround(platform.outline);
   const y = (box.minY + box.maxY) / 2;
   const over = (box.maxX - box.minX) * 0.06;
-  const from = toScreen(view, { x: box.minX - over, y });
+  // behind, the width's dimension stands in the way
+  const from = toScreen(view, { x: box.minX - drawing.mark.cross / view.scale, y });
   const to = toScreen(view, { x: box.maxX + over, y });
   return linesPath([{ x1: from.x, y1: from.y, x2: to.x, y2: to.y }]);
 }
@@ -169,6 +170,9 @@ function bodyTexts(drawn: DrawnPlatform, view: Viewport, unit: LengthUnit): read
   return texts;
 }
 
+/** Share of a body's length that words may take when there are shorter ones. */
+const FULL_SHARE = 0.75;
+
 function writeInside(
   key: string,
   outline: readonly Point[],
@@ -181,8 +185,11 @@ function writeInside(
   const middle = { x: (screen.minX + screen.maxX) / 2, y: (screen.minY + screen.maxY) / 2 };
   const upright = height > width;
   const [room, depth] = upright ? [height, width] : [width, height];
-  if (depth < size + 2) return null;
-  const whole = wordings.find((wording) => textWidth(wording, size) + 6 <= room);
+  // the hatch or the edges of the body must still be seen beside the words
+  if (depth < size + 8) return null;
+  const whole =
+    wordings.find((wording) => textWidth(wording, size) <= FULL_SHARE * room) ??
+    wordings.slice(-1).find((wording) => textWidth(wording, size) + 6 <= room);
   const text = whole ?? (room > 60 ? fitText(wordings.at(-1) ?? '', size, room - 6) : null);
   if (text === null) return null;
   const length = textWidth(text, size) + 4;

@@ -92,14 +92,20 @@ const PairRow = memo(function PairRow({
           {names}
         </Text>
         {unnumbered ? (
-          <View style={{ flex: 1 }}>
+          <>
             <Text variant="smallFiguresStrong" tone="soft">
               {state}
             </Text>
-            <Text variant="smallFigures" tone="soft" numberOfLines={2}>
+            <Text
+              variant="smallFigures"
+              tone="soft"
+              align="right"
+              numberOfLines={1}
+              style={{ flex: 1, minWidth: space.none }}
+            >
               {basis}
             </Text>
-          </View>
+          </>
         ) : (
           <>
             <Text variant="figuresStrong" tone={STATE_TONE[state]} align="right" style={{ width: 40 }}>

@@ -42,7 +42,11 @@ export function ResultsPanel({
   const [whole, setWhole] = useState(false);
   const own = chosenAntenna === null ? estimate.pairs : pairsOf(estimate, chosenAntenna);
   const shown = whole ? own : own.slice(0, rows);
-  const detailed = findPair(estimate, chosenPair) ?? own[0] ?? worstPair(estimate);
+  const detailed =
+    findPair(estimate, chosenPair) ??
+    own.find(({ state }) => state !== 'not held') ??
+    own[0] ??
+    worstPair(estimate);
   const title =
     chosenAntenna === null ? 'Pairs, worst first' : `Pairs of ${labelOf(chosenAntenna)}, worst first`;
   return (
@@ -60,7 +64,9 @@ export function ResultsPanel({
           <Heading level={3} tone="soft">
             {title}
           </Heading>
-          <Button label="All as a table" variant="quiet" onPress={() => setAsTable(true)} />
+          <View style={{ marginRight: -space.l }}>
+            <Button label="All as a table" variant="quiet" onPress={() => setAsTable(true)} />
+          </View>
         </View>
         {own.length === 0 ? (
           <Text variant="small" tone="soft" style={{ paddingVertical: space.m }}>

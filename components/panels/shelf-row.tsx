@@ -87,12 +87,14 @@ export function ShelfRow({ part, disabled, onPull, onPlace }: ShelfRowProps) {
         >
           <Icon name="antenna" tone={disabled ? 'inkSoft' : 'ink'} />
         </View>
-        <Text variant="smallFigures" style={{ flex: 1 }} numberOfLines={2}>
-          {part.name}
-        </Text>
-        <Text variant="smallFigures" tone="soft" align="right">
-          {describePart(part)}
-        </Text>
+        <View style={{ flex: 1, minWidth: space.none }}>
+          <Text variant="smallFigures" numberOfLines={1}>
+            {part.name}
+          </Text>
+          <Text variant="caption" tone="soft" numberOfLines={1}>
+            {describePart(part)}
+          </Text>
+        </View>
       </Pressable>
     </View>
   );

@@ -33,7 +33,9 @@ export function PlanHeader({ plan, children }: PlanHeaderProps) {
         <Heading level={1} variant="strong" numberOfLines={1} style={{ flexShrink: 1 }}>
           {layout.name}
         </Heading>
-        <Chip text={`working copy, ${state}`} />
+        <View>
+          <Chip text={`working copy, ${state}`} />
+        </View>
         <PlanStatus plan={plan} />
       </View>
       <UndoButtons plan={plan} />

@@ -49,7 +49,11 @@ export function PlanOnDesktop({ plan }: { readonly plan: Plan }) {
           head={<PlanHeadline plan={plan} />}
           parts={[
             { key: 'results', label: 'Pairs' },
-            { key: 'comments', label: 'Comments', count: plan.openComments },
+            {
+              key: 'comments',
+              label: 'Comments',
+              count: plan.openComments > 0 ? plan.openComments : undefined,
+            },
             { key: 'revisions', label: 'Revisions' },
           ]}
           active={shownRight}

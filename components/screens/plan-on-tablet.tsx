@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import { measure } from '@/components/theme/tokens';
+import { groupOf, groupTabs } from './plan-groups';
 import { PlanHeader } from './plan-header';
 import { PlanHeadline } from './plan-headline';
 import { PlanSide } from './plan-side';
@@ -19,24 +20,12 @@ export function PlanOnTablet({ plan }: { readonly plan: Plan }) {
           side="right"
           width={measure.panel}
           head={<PlanHeadline plan={plan} />}
-          parts={planTabs(plan)}
-          active={plan.part}
+          parts={groupTabs(plan)}
+          active={groupOf(plan.part).parts[0]}
+          part={plan.part}
           onChange={plan.show}
         />
       </View>
     </View>
   );
-}
-
-/** All parts in one row, for a window with one column. */
-export function planTabs({ openComments }: Plan) {
-  return [
-    { key: 'results', label: 'Pairs' },
-    { key: 'shelf', label: 'Shelf' },
-    { key: 'antenna', label: 'Antennas' },
-    { key: 'comments', label: 'Comments', count: openComments },
-    { key: 'revisions', label: 'Revisions' },
-    { key: 'radios', label: 'Radios' },
-    { key: 'platform', label: 'Platform' },
-  ] as const;
 }

@@ -3,6 +3,7 @@ import { ScrollView, View } from 'react-native';
 import { line, space } from '@/components/theme/tokens';
 import { useTheme } from '@/components/theme/use-theme';
 import { Tabs, type Tab } from '@/components/ui/tabs';
+import { PlanGroupView } from './plan-groups';
 import { PlanPartView } from './plan-part-view';
 import type { Plan, PlanPart } from './plan-state';
 
@@ -13,13 +14,15 @@ type PlanSideProps = {
   readonly width: number;
   readonly parts: readonly Tab<PlanPart>[];
   readonly active: PlanPart;
+  /** The part that is shown, when its tab stands for several. */
+  readonly part?: PlanPart;
   readonly onChange: (part: PlanPart) => void;
   /** Stays in view over the tabs. */
   readonly head?: ReactNode;
 };
 
 /** A column beside the plan with a few of its parts. */
-export function PlanSide({ plan, label, side, width, parts, active, onChange, head }: PlanSideProps) {
+export function PlanSide({ plan, label, side, width, parts, active, part, onChange, head }: PlanSideProps) {
   const { color } = useTheme();
   return (
     <View
@@ -38,7 +41,11 @@ export function PlanSide({ plan, label, side, width, parts, active, onChange, he
           <Tabs label={label} tabs={parts} active={active} onChange={onChange} />
         </View>
         <ScrollView contentContainerStyle={{ padding: space.l }}>
-          <PlanPartView key={active} plan={plan} part={active} />
+          {part === undefined ? (
+            <PlanPartView key={active} plan={plan} part={active} />
+          ) : (
+            <PlanGroupView plan={plan} part={part} />
+          )}
         </ScrollView>
       </View>
     </View>

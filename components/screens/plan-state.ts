@@ -69,7 +69,7 @@ export function usePlan(layout: Layout): Plan {
     labelOf,
     comments,
     openComments: comments.filter(({ resolvedAt }) => resolvedAt === null).length,
-    state: lastLetter === null ? 'unsaved' : `after ${lastLetter}`,
+    state: lastLetter === null ? 'no revision yet' : `after ${lastLetter}`,
     canComment: (abilities ?? layout.abilities).comment,
     part,
     show,

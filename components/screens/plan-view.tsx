@@ -18,8 +18,8 @@ type PlanViewProps = {
   readonly narrow?: boolean;
 };
 
-/** Height of the readout's line and the room of the tools, px. */
-const READOUT_HEIGHT = 38;
+/** Height of the readout, in one line or on a phone two, and how many tools there are, px. */
+const READOUT_HEIGHT = { wide: 38, narrow: 58 } as const;
 const TOOLS = 5;
 
 /** The drawing with what lies over it: readout, title block, tools, notices. */
@@ -27,9 +27,12 @@ export function PlanView({ plan, coveredBelow = 0, narrow = false }: PlanViewPro
   const [size, setSize] = useState<Size>({ width: 0, height: 0 });
   const [block, setBlock] = useState<Size>({ width: 0, height: 0 });
   const foot = coveredBelow + space.m;
+  const readout = READOUT_HEIGHT[narrow ? 'narrow' : 'wide'] + space.m;
+  // on a phone the drawing leaves the tools' column free
+  const right = narrow ? target.min + space.s : 0;
   const cover = useMemo<Insets>(
-    () => ({ top: READOUT_HEIGHT + space.m, right: 0, bottom: coveredBelow, left: 0 }),
-    [coveredBelow],
+    () => ({ top: readout, right, bottom: coveredBelow, left: 0 }),
+    [readout, right, coveredBelow],
   );
   const covered = useMemo<readonly ScreenBox[]>(() => {
     const toolsLength = TOOLS * (target.min + space.s);
@@ -37,7 +40,7 @@ export function PlanView({ plan, coveredBelow = 0, narrow = false }: PlanViewPro
       ? { width: target.min + space.m, height: toolsLength }
       : { width: toolsLength, height: target.min };
     const boxes = [
-      { left: 0, top: 0, width: size.width, height: READOUT_HEIGHT + space.m },
+      { left: 0, top: 0, width: size.width, height: readout },
       {
         left: size.width - tools.width - space.m,
         top: size.height - foot - tools.height,
@@ -53,7 +56,7 @@ export function PlanView({ plan, coveredBelow = 0, narrow = false }: PlanViewPro
       });
     }
     return boxes;
-  }, [size, block, narrow, foot]);
+  }, [size, block, narrow, foot, readout]);
   return (
     <View
       role="main"

@@ -42,7 +42,7 @@ export function Tabs<K extends string>({
       aria-label={label}
       style={{
         flexDirection: 'row',
-        gap: bottom ? space.none : space.l,
+        gap: bottom ? space.none : tabs.length > 3 ? space.xs : space.l,
         backgroundColor: color.sheet,
         borderColor: color.rule,
         ...(bottom

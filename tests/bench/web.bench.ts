@@ -1,59 +1,64 @@
-import { spawn } from 'node:child_process';
-import { mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import path from 'node:path';
 import { gzipSync } from 'node:zlib';
+import { quantile } from '../support/whip-scenes';
 import type { Figure } from './figure';
+import { openDemoLayout, waitUntilUsable, withPlanBench, type PlanBench } from './plan-page';
 
-const ROOT = path.resolve(__dirname, '../..');
-const SCRIPTS = path.join('_expo', 'static', 'js', 'web');
+const ROUNDS = 5;
 
-/** Every script of the page itself, the root of all screens, and the sign-in: what stands before the first screen. */
+/**
+ * Milliseconds from an empty cache to a usable plan: from asking for the page to a sign-in that can be filled in, and
+ * from pressing "Sign in" to antennas that can be reached, a worst pair that is told and a line that stands. What
+ * the typing between the two takes is not counted.
+ */
+async function coldStart(bench: PlanBench, layoutId: string): Promise<number> {
+  const context = await bench.browser.newContext({ viewport: { width: 1440, height: 900 } });
+  try {
+    const page = await context.newPage();
+    const begin = performance.now();
+    await page.goto(`${bench.url}/layouts/${layoutId}`, { waitUntil: 'commit' });
+    const email = page.getByLabel('E-mail').first();
+    await email.waitFor();
+    const opened = performance.now() - begin;
+    await email.fill(bench.account.email);
+    const password = page.getByLabel('Password').first();
+    await password.fill(bench.account.password);
+    const pressed = performance.now();
+    await password.press('Enter');
+    await waitUntilUsable(page);
+    return opened + performance.now() - pressed;
+  } finally {
+    await context.close();
+  }
+}
+
+/** Kilobytes of gzip of every script that is fetched before the first screen stands. */
+async function entrySize({ browser, url }: PlanBench): Promise<number> {
+  const context = await browser.newContext();
+  const page = await context.newPage();
+  const bodies: Promise<Buffer>[] = [];
+  page.on('response', (response) => {
+    if (response.request().resourceType() === 'script') bodies.push(response.body());
+  });
+  await page.goto(url);
+  await page.getByLabel('E-mail').first().waitFor();
+  const sizes = (await Promise.all(bodies)).map((body) => gzipSync(body).length);
+  if (sizes.length === 0) throw new Error('the page fetched no script');
+  return sizes.reduce((sum, size) => sum + size, 0) / 1000;
+}
+
 export const figures: readonly Figure[] = [
   {
-    name: 'web.entry.gzip',
-    unit: 'kB',
+    name: 'web.cold.usable',
+    unit: 'ms',
     group: 'web',
-    measure: async () => {
-      const folder = mkdtempSync(path.join(tmpdir(), 'elbowroom-bench-'));
-      try {
-        await exportClient(folder);
-        const page = readFileSync(path.join(folder, 'index.html'), 'utf8');
-        const named = [...page.matchAll(/<script src="([^"]+)"/g)].map((match) => match[1] ?? '');
-        if (named.length === 0) throw new Error('the page of the built client names no script');
-        const files = [
-          ...named.map((name) => path.join(folder, name)),
-          ...partsNamed(folder, ['_layout', 'sign-in']),
-        ];
-        return files.reduce((sum, file) => sum + gzipSync(readFileSync(file)).byteLength, 0) / 1000;
-      } finally {
-        rmSync(folder, { recursive: true, force: true });
-      }
-    },
+    measure: () =>
+      withPlanBench(async (bench) => {
+        const finder = await bench.browser.newContext();
+        const { id } = await openDemoLayout(finder, bench);
+        const times: number[] = [];
+        for (let round = 0; round < ROUNDS; round += 1) times.push(await coldStart(bench, id));
+        return quantile(times, 0.5);
+      }),
   },
+  { name: 'web.entry.gzip', unit: 'kB', group: 'web', measure: () => withPlanBench(entrySize) },
 ];
-
-/** The parts of the program that belong to these routes. */
-function partsNamed(folder: string, routes: readonly string[]): string[] {
-  const parts = readdirSync(path.join(folder, SCRIPTS));
-  return routes.map((route) => {
-    const part = parts.find((name) => new RegExp(`^${route}-[0-9a-f]+\\.js$`).test(name));
-    if (!part) throw new Error(`no part of the built client belongs to the route ${route}`);
-    return path.join(folder, SCRIPTS, part);
-  });
-}
-
-function exportClient(folder: string): Promise<void> {
-  const child = spawn('npx', ['expo', 'export', '--platform', 'web', '--output-dir', folder], {
-    cwd: ROOT,
-    stdio: ['ignore', 'ignore', 'pipe'],
-  });
-  return new Promise((resolve, reject) => {
-    let problems = '';
-    child.stderr.on('data', (chunk: Buffer) => (problems += chunk.toString()));
-    child.on('error', reject);
-    child.on('close', (code) =>
-      code === 0 ? resolve() : reject(new Error(`the client was not built: ${problems.trim()}`)),
-    );
-  });
-}
