@@ -3,6 +3,7 @@ import type { AntennaResult, PairResult, PatternResult, Reason } from './estimat
 import { frequencyWords } from './frequency-words';
 import type { FrequencySolvers } from './frequency-solvers';
 import { MOST_WAVELENGTHS } from './frequency-solvers';
+import { notFinite } from './judge-pair';
 import type { PairPlan } from './pair-plan';
 import type { AntennaScene } from './scene-from-document';
 
@@ -32,15 +33,20 @@ export function antennaResult(
     } else {
       const { gainDbi, aloneDbi, rippleDb, deepestBearingDeg } = solver.pattern(0, port, CUT);
       const entry = wireNotHeld(port);
-      pattern = {
-        frequency,
-        ...CUT,
-        gainDbi,
-        aloneDbi,
-        rippleDb,
-        deepestAzimuthDeg: bearingNormalise(-deepestBearingDeg),
-        reason: reason ?? patternReason(antenna.label, entry?.code, entry?.message),
-      };
+      const ownReason = reason ?? patternReason(antenna.label, entry?.code, entry?.message);
+      if ([rippleDb, deepestBearingDeg, ...gainDbi, ...aloneDbi].every(Number.isFinite)) {
+        pattern = {
+          frequency,
+          ...CUT,
+          gainDbi,
+          aloneDbi,
+          rippleDb,
+          deepestAzimuthDeg: bearingNormalise(-deepestBearingDeg),
+          reason: ownReason,
+        };
+      } else {
+        reason = ownReason ?? notFinite(frequency);
+      }
     }
   }
   return { antennaId: antenna.id, pattern, reason, worstMarginDb: worstMargin(antenna.id, pairs) };

@@ -195,7 +195,8 @@ function keptApart({ from, into }: PlannedPair, reason: Reason): PairResult {
   };
 }
 
-function notFinite(frequency: number): Reason {
+/** Why a number that came out infinite, or not a number at all, is not shown. `frequency` in Hz. */
+export function notFinite(frequency: number): Reason {
   return {
     code: 'not-finite',
     message: `The estimate gives no finite number at ${frequencyWords(frequency)}.`,
