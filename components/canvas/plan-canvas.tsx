@@ -71,6 +71,8 @@ const SNAP_REACH = 8;
 /** What one press of a key pans and zooms. */
 const KEY_PAN = 48;
 const KEY_ZOOM = 1.25;
+/** Room that the scale bar takes along the lower edge, px. */
+const SCALE_BAR_HEIGHT = 30;
 
 /** The plan: a workshop drawing that can be touched. */
 export function PlanCanvas(props: PlanCanvasProps) {
@@ -88,11 +90,13 @@ export function PlanCanvas(props: PlanCanvasProps) {
 
   useEffect(() => {
     if (!platform || !size) return;
-    const margin = Math.min(size.width, size.height) < 500 ? drawing.margin.phone : drawing.margin.wide;
+    const isNarrow = Math.min(size.width, size.height) < 500;
+    const margin = isNarrow ? drawing.margin.phone : drawing.margin.wide;
     const insets = {
       top: cover.top + margin,
       right: cover.right + margin,
-      bottom: cover.bottom + margin,
+      // on a phone the scale bar lies below the width's dimension, not beside it
+      bottom: cover.bottom + margin + (isNarrow ? SCALE_BAR_HEIGHT : 0),
       left: cover.left + margin,
     };
     views.setFrame({ box: boxAround(platform.platform.outline), size, insets });
@@ -122,12 +126,18 @@ export function PlanCanvas(props: PlanCanvasProps) {
       onLeave: () => editor.pointAt(null),
     });
     gestures.current = own;
+    const answer = (press: KeyboardEvent) => {
+      const { onEditNumbers } = latest.current.props;
+      answerKey(press, { editor, views, gestures: own, onEditNumbers });
+    };
+    element.addEventListener('keydown', answer);
     return () => {
+      element.removeEventListener('keydown', answer);
       watched.disconnect();
       own.dispose();
       gestures.current = null;
     };
-  }, [editor]);
+  }, [editor, views]);
 
   useImperativeHandle(ref, () => ({
     fit: views.fit,
@@ -172,8 +182,6 @@ export function PlanCanvas(props: PlanCanvasProps) {
       {...webAttributes({
         tabIndex: 0,
         dataSet: { tool },
-        onKeyDown: (press) =>
-          answerKey(press, { editor, views, gestures: gestures.current, onEditNumbers: props.onEditNumbers }),
       })}
       style={[
         webStyle({ touchAction: 'none' }),

@@ -88,7 +88,7 @@ const PairRow = memo(function PairRow({
         })}
       >
         <StateMark state={state} />
-        <Text variant="smallFiguresStrong" style={{ width: 88 }}>
+        <Text variant="smallFiguresStrong" style={{ width: 76 }}>
           {names}
         </Text>
         {unnumbered ? (
@@ -108,7 +108,7 @@ const PairRow = memo(function PairRow({
           </>
         ) : (
           <>
-            <Text variant="figuresStrong" tone={STATE_TONE[state]} align="right" style={{ width: 40 }}>
+            <Text variant="figuresStrong" tone={STATE_TONE[state]} align="right" style={{ width: 36 }}>
               {margin}
             </Text>
             <Text variant="smallFigures" tone="soft" align="right" style={{ flex: 1 }}>

@@ -1,5 +1,5 @@
 import { useDeferredValue } from 'react';
-import { useEditor } from '@/components/canvas/use-editor';
+import { useCalmEditor } from '@/components/canvas/use-calm-editor';
 import { ResultHeadline } from '@/components/panels/result-headline';
 import type { Plan } from './plan-state';
 
@@ -7,6 +7,6 @@ type PlanHeadlineProps = { readonly plan: Plan; readonly brief?: boolean };
 
 /** The worst pair in one sentence; in view whatever else is open. */
 export function PlanHeadline({ plan: { editor, labelOf }, brief }: PlanHeadlineProps) {
-  const estimate = useDeferredValue(useEditor(editor, (snapshot) => snapshot.estimate));
+  const estimate = useDeferredValue(useCalmEditor(editor, (snapshot) => snapshot.estimate));
   return <ResultHeadline estimate={estimate} labelOf={labelOf} brief={brief} />;
 }

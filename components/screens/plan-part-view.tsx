@@ -1,5 +1,6 @@
 import { useDeferredValue, useState } from 'react';
 import { View } from 'react-native';
+import { useCalmEditor } from '@/components/canvas/use-calm-editor';
 import { useEditor } from '@/components/canvas/use-editor';
 import { AntennaList } from '@/components/panels/antenna-list';
 import { AntennaNumbers } from '@/components/panels/antenna-numbers';
@@ -46,7 +47,7 @@ export function PlanPartView({ plan, part, onPlan }: PlanPartViewProps) {
 
 /** The panels follow the finger a little later than the plan does: the plan comes first in every frame. */
 function useResults({ editor }: Plan) {
-  const snapshot = useDeferredValue(useEditor(editor, (whole) => whole));
+  const snapshot = useDeferredValue(useCalmEditor(editor, (whole) => whole));
   return snapshot.painted && snapshot.estimate
     ? { document: snapshot.painted, estimate: snapshot.estimate, snapshot }
     : null;

@@ -21,9 +21,12 @@ type PlanViewProps = {
 /** Height of the readout, in one line or on a phone two, and how many tools there are, px. */
 const READOUT_HEIGHT = { wide: 38, narrow: 58 } as const;
 const TOOLS = 5;
+/** Width of the plan from which the distances to two neighbours fit on one line, px. */
+const ROOM_FOR_TWO = 760;
 
 /** The drawing with what lies over it: readout, title block, tools, notices. */
 export function PlanView({ plan, coveredBelow = 0, narrow = false }: PlanViewProps) {
+  const { canvas } = plan;
   const [size, setSize] = useState<Size>({ width: 0, height: 0 });
   const [block, setBlock] = useState<Size>({ width: 0, height: 0 });
   const foot = coveredBelow + space.m;
@@ -64,7 +67,7 @@ export function PlanView({ plan, coveredBelow = 0, narrow = false }: PlanViewPro
       onLayout={({ nativeEvent: { layout } }) => setSize({ width: layout.width, height: layout.height })}
     >
       <PlanCanvas
-        ref={plan.canvas}
+        ref={canvas}
         editor={plan.editor}
         comments={plan.comments}
         chosenComment={plan.chosenComment}
@@ -81,7 +84,7 @@ export function PlanView({ plan, coveredBelow = 0, narrow = false }: PlanViewPro
         style={{ position: 'absolute', top: space.m, left: space.m, right: space.m, pointerEvents: 'none' }}
       >
         <View style={{ alignSelf: 'flex-start' }}>
-          <Readout plan={plan} neighbours={narrow ? 1 : 2} />
+          <Readout plan={plan} neighbours={size.width < ROOM_FOR_TWO ? 1 : 2} />
         </View>
       </View>
       <View

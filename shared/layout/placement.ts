@@ -1,6 +1,7 @@
 import { boxAround, boxContains } from '../geometry/box';
 import { EDGE_TOLERANCE, polygonContains, polygonContainsStrictly, type Polygon } from '../geometry/polygon';
 import type { AntennaPart, LayoutDocument, PlacedAntenna, Point, Surface } from './document';
+import { compareLabels } from './labels';
 
 /** Why an antenna may not stand somewhere; `objectId` names the keep-out or obstacle. */
 export type PlacementProblem = {
@@ -61,7 +62,7 @@ export function misplacedAntennas(document: LayoutDocument): MisplacedAntenna[] 
       const problem = placementProblem(document, antenna);
       return problem ? [{ antenna, problem }] : [];
     })
-    .sort((a, b) => a.antenna.label.localeCompare(b.antenna.label, 'en', { numeric: true }));
+    .sort((a, b) => compareLabels(a.antenna, b.antenna));
 }
 
 /** Lowest and highest point of an antenna above its surface, m, taken upright. */

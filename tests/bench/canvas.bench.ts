@@ -1,3 +1,4 @@
+import { setTimeout } from 'node:timers/promises';
 import type { CDPSession, Page } from 'playwright-core';
 import { quantile } from '../support/whip-scenes';
 import type { Figure } from './figure';
@@ -6,6 +7,7 @@ import { fillLayout, openDemoLayout, waitUntilUsable, withPlanBench } from './pl
 const ANTENNAS = 16;
 /** Moves of the finger: about six seconds at sixty a second. */
 const MOVES = 360;
+const MOVE_MS = 16;
 /** A frame that takes longer is one that a person sees, ms. */
 const LATE_MS = 33;
 
@@ -57,14 +59,20 @@ async function dragInCircles(
     cdp.send('Input.dispatchTouchEvent', { type, touchPoints: [{ ...at, id: 1 }] });
   await touch('touchStart', centre);
   await page.evaluate(KEEP_FRAMES);
+  const moves: Promise<unknown>[] = [];
   for (let move = 1; move <= MOVES; move += 1) {
     const turn = move / 40;
     const reach = Math.min(1, move / 60);
-    await touch('touchMove', {
-      x: centre.x + 90 * reach * Math.sin(turn),
-      y: centre.y + 60 * reach * Math.sin(1.7 * turn),
-    });
+    // a finger does not wait for the page: the next move comes whether the last one was drawn or not
+    moves.push(
+      touch('touchMove', {
+        x: centre.x + 90 * reach * Math.sin(turn),
+        y: centre.y + 60 * reach * Math.sin(1.7 * turn),
+      }),
+    );
+    await setTimeout(MOVE_MS);
   }
+  await Promise.all(moves);
   const times = await page.evaluate(() => (globalThis as unknown as { dragFrames: number[] }).dragFrames);
   await cdp.send('Input.dispatchTouchEvent', { type: 'touchEnd', touchPoints: [] });
   if ((await antenna.getAttribute('aria-label')) === before) throw new Error('the antenna did not move');
