@@ -113,6 +113,9 @@ function looksOf(
   ]);
 }
 
+/** A shorter dimension is none: the antenna stands on the datum's line, m. */
+const SHORTEST = 0.0005;
+
 type DatumDimensionsProps = {
   readonly document: LayoutDocument;
   readonly antenna: PlacedAntenna;
@@ -146,9 +149,11 @@ function DatumDimensions({ document, antenna, view, unit }: DatumDimensionsProps
         strokeWidth={drawing.stroke.fine}
         strokeDasharray={drawing.dash.dotted}
       />
-      {dimensions.map((dimension) => (
-        <DimensionMark key={dimension.key} dimension={dimension} />
-      ))}
+      {dimensions
+        .filter((_, index) => Math.abs(index === 0 ? x : y) >= SHORTEST)
+        .map((dimension) => (
+          <DimensionMark key={dimension.key} dimension={dimension} />
+        ))}
     </>
   );
 }

@@ -56,6 +56,8 @@ type PlanCanvasProps = {
   readonly unit: LengthUnit;
   /** What covers the edges of the canvas: the drawing is fitted to what is left. */
   readonly cover: Insets;
+  /** What the drawing further leaves free below when it is fitted: a corner that things lie in, px. */
+  readonly roomBelow?: number;
   /** Pieces that lie over the canvas: nothing is written under them. */
   readonly covered: readonly ScreenBox[];
   readonly onChooseComment: (commentId: string | null) => void;
@@ -76,7 +78,7 @@ const SCALE_BAR_HEIGHT = 30;
 
 /** The plan: a workshop drawing that can be touched. */
 export function PlanCanvas(props: PlanCanvasProps) {
-  const { editor, unit, cover, covered, ref } = props;
+  const { editor, unit, cover, covered, roomBelow = 0, ref } = props;
   const { color } = useTheme();
   const surface = useRef<View>(null);
   const gestures = useRef<GestureSurface | null>(null);
@@ -96,11 +98,11 @@ export function PlanCanvas(props: PlanCanvasProps) {
       top: cover.top + margin,
       right: cover.right + margin,
       // on a phone the scale bar lies below the width's dimension, not beside it
-      bottom: cover.bottom + margin + (isNarrow ? SCALE_BAR_HEIGHT : 0),
+      bottom: cover.bottom + margin + (isNarrow ? SCALE_BAR_HEIGHT : roomBelow),
       left: cover.left + margin,
     };
     views.setFrame({ box: boxAround(platform.platform.outline), size, insets });
-  }, [platform, size, cover, views]);
+  }, [platform, size, cover, roomBelow, views]);
 
   const context = makeContext(props, views, keeper);
   const latest = useRef({ context, props });
@@ -198,6 +200,23 @@ export function PlanCanvas(props: PlanCanvasProps) {
           >
             <GridLayer view={view} size={size} unit={unit} />
             <PlatformLayer drawn={drawn} />
+            <ScaleBar
+              scale={view.scale}
+              unit={unit}
+              x={cover.left + 20}
+              y={size.height - cover.bottom - 22}
+            />
+          </Svg>
+          {/* a sheet of its own: what stands still is not painted again while something moves over it */}
+          <Svg
+            width={size.width}
+            height={size.height}
+            aria-hidden
+            style={[
+              webStyle({ willChange: 'transform' }),
+              { position: 'absolute', left: 0, top: 0, pointerEvents: 'none' },
+            ]}
+          >
             <MovingLayers
               editor={editor}
               keeper={keeper}
@@ -208,12 +227,6 @@ export function PlanCanvas(props: PlanCanvasProps) {
               comments={props.comments}
               chosenComment={props.chosenComment}
               chosenPair={props.chosenPair}
-            />
-            <ScaleBar
-              scale={view.scale}
-              unit={unit}
-              x={cover.left + 20}
-              y={size.height - cover.bottom - 22}
             />
           </Svg>
           <AntennaTargets editor={editor} view={view} unit={unit} />

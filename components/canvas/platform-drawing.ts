@@ -156,27 +156,30 @@ function outerDimensions(
 
 function bodyTexts(drawn: DrawnPlatform, view: Viewport, unit: LengthUnit): readonly PlanText[] {
   const texts: PlanText[] = [];
-  const offer = (key: string, outline: readonly Point[], wordings: readonly string[]) => {
-    const text = writeInside(key, outline, wordings, view);
+  const offer = (key: string, outline: readonly Point[], wordings: readonly string[], beside: number) => {
+    const text = writeInside(key, outline, wordings, beside, view);
     if (text) texts.push(text);
   };
   for (const obstacle of Object.values(drawn.obstacles)) {
     const height = `${drawnLength(obstacle.height, unit)} high`;
-    offer(obstacle.id, obstacle.outline, [`${obstacle.name}, ${height}`, height]);
+    offer(obstacle.id, obstacle.outline, [`${obstacle.name}, ${height}`, height], 2);
   }
   for (const keepOut of Object.values(drawn.keepOuts)) {
-    offer(keepOut.id, keepOut.outline, [`${keepOut.name}: ${keepOut.reason}`, keepOut.name]);
+    offer(keepOut.id, keepOut.outline, [`${keepOut.name}: ${keepOut.reason}`, keepOut.name], BESIDE_HATCH);
   }
   return texts;
 }
 
 /** Share of a body's length that words may take when there are shorter ones. */
 const FULL_SHARE = 0.75;
+/** Hatch that must still be seen beside the words on it, px. */
+const BESIDE_HATCH = 8;
 
 function writeInside(
   key: string,
   outline: readonly Point[],
   wordings: readonly string[],
+  beside: number,
   view: Viewport,
 ): PlanText | null {
   const screen = boxAround(outline.map((point) => toScreen(view, point)));
@@ -185,8 +188,7 @@ function writeInside(
   const middle = { x: (screen.minX + screen.maxX) / 2, y: (screen.minY + screen.maxY) / 2 };
   const upright = height > width;
   const [room, depth] = upright ? [height, width] : [width, height];
-  // the hatch or the edges of the body must still be seen beside the words
-  if (depth < size + 8) return null;
+  if (depth < size + beside) return null;
   const whole =
     wordings.find((wording) => textWidth(wording, size) <= FULL_SHARE * room) ??
     wordings.slice(-1).find((wording) => textWidth(wording, size) + 6 <= room);

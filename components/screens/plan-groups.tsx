@@ -11,13 +11,10 @@ export const PLAN_GROUPS: readonly [PlanGroup, ...PlanGroup[]] = [
   { label: 'Pairs', parts: ['results'] },
   { label: 'Shelf', parts: ['shelf'] },
   { label: 'Antennas', parts: ['antenna'] },
-  { label: 'Fit-out', parts: ['radios', 'platform'] },
   { label: 'Review', parts: ['comments', 'revisions'] },
 ];
 
 const WORDS: Partial<Record<PlanPart, string>> = {
-  radios: 'Radios',
-  platform: 'Platform',
   comments: 'Comments',
   revisions: 'Revisions',
 };

@@ -7,7 +7,7 @@ import { PlanSide } from './plan-side';
 import type { Plan, PlanPart } from './plan-state';
 import { PlanView } from './plan-view';
 
-const LEFT: readonly PlanPart[] = ['shelf', 'antenna', 'radios', 'platform'];
+const LEFT: readonly PlanPart[] = ['shelf', 'antenna'];
 
 /** Shelf, plan and results side by side. */
 export function PlanOnDesktop({ plan }: { readonly plan: Plan }) {
@@ -34,8 +34,6 @@ export function PlanOnDesktop({ plan }: { readonly plan: Plan }) {
           parts={[
             { key: 'shelf', label: 'Shelf' },
             { key: 'antenna', label: 'Antennas' },
-            { key: 'radios', label: 'Radios' },
-            { key: 'platform', label: 'Platform' },
           ]}
           active={shownLeft}
           onChange={open}

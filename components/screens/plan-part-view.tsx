@@ -32,10 +32,6 @@ export function PlanPartView({ plan, part, onPlan }: PlanPartViewProps) {
       return <Shelf plan={plan} onPlan={onPlan} />;
     case 'antenna':
       return <Antennas plan={plan} onPlan={onPlan} />;
-    case 'radios':
-      return null;
-    case 'platform':
-      return null;
     case 'comments':
       return <Comments plan={plan} onPlan={onPlan} />;
     case 'revisions':

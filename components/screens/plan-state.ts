@@ -14,7 +14,7 @@ import type { Layout } from '@/shared/api/layouts';
 import { usePlanEditor } from './use-plan-editor';
 
 /** What can be open beside the plan; which of them stand together depends on the room there is. */
-export type PlanPart = 'results' | 'shelf' | 'radios' | 'antenna' | 'platform' | 'comments' | 'revisions';
+export type PlanPart = 'results' | 'shelf' | 'antenna' | 'comments' | 'revisions';
 
 /** An open plan: its editor, and what is chosen and open on its screen. */
 export type Plan = {

@@ -21,6 +21,8 @@ type PlanViewProps = {
 /** Height of the readout, in one line or on a phone two, and how many tools there are, px. */
 const READOUT_HEIGHT = { wide: 38, narrow: 58 } as const;
 const TOOLS = 5;
+/** What title block with three people and tools take above the drawing's own margin, px. */
+const ROOM_BELOW = 130;
 /** Width of the plan from which the distances to two neighbours fit on one line, px. */
 const ROOM_FOR_TWO = 760;
 
@@ -75,6 +77,7 @@ export function PlanView({ plan, coveredBelow = 0, narrow = false }: PlanViewPro
         unit={plan.unit}
         cover={cover}
         covered={covered}
+        roomBelow={narrow ? 0 : ROOM_BELOW}
         onChooseComment={plan.chooseComment}
         onChoosePair={plan.choosePair}
         onCommentAt={plan.aimComment}

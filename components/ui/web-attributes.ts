@@ -46,6 +46,7 @@ export function webStyle(style: {
   readonly transition?: string;
   readonly cursor?: 'grab' | 'grabbing' | 'crosshair' | 'default';
   readonly touchAction?: 'none' | 'pan-y' | 'manipulation';
+  readonly willChange?: 'transform';
 }): object {
   return style;
 }
