@@ -1,0 +1,5 @@
+import { JobsScreen } from '@/components/screens/jobs-screen';
+
+export default function Jobs() {
+  return <JobsScreen />;
+}
