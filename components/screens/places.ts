@@ -3,7 +3,7 @@ import type { Session } from '@/shared/api/session';
 
 /** A place of the navigation. */
 export type Place = {
-  readonly href: '/jobs' | '/frozen' | '/people' | '/mails' | '/account';
+  readonly href: '/jobs' | '/frozen' | '/parts' | '/people' | '/mails' | '/account';
   readonly label: string;
   readonly icon: IconName;
 };
@@ -15,6 +15,7 @@ export function placesFor({ abilities }: Session): readonly Place[] {
   const places: Place[] = [];
   if (abilities.seeJobs) {
     places.push({ href: '/jobs', label: 'Jobs', icon: 'jobs' });
+    places.push({ href: '/parts', label: 'Parts', icon: 'parts' });
   } else places.push({ href: '/frozen', label: 'Frozen', icon: 'lock' });
   places.push({ href: '/people', label: 'People', icon: 'people' });
   if (abilities.seeMails) places.push({ href: '/mails', label: 'Mails', icon: 'mail' });

@@ -1,0 +1,5 @@
+import { PartsScreen } from '@/components/screens/parts-screen';
+
+export default function Parts() {
+  return <PartsScreen />;
+}
